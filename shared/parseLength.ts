@@ -7,8 +7,10 @@ export interface ParseLengthOptions {
 }
 
 type NamedUnit = 'ft' | 'in' | 'm' | 'cm' | 'mm'
-/** Tenths of a millimetre in each unit: whole numbers, so that a half millimetre rounds the same way every time. */
-export const tenthsPerUnit: Record<NamedUnit, number> = { ft: 3048, in: 254, m: 10_000, cm: 100, mm: 10 }
+const mmPerUnit: Record<Exclude<NamedUnit, 'ft'>, number> = { in: 25.4, m: 1000, cm: 10, mm: 1 }
+
+/** Feet go by way of inches, so that a half millimetre rounds one way whichever unit it was typed in. */
+const mmOf = (value: number, unit: NamedUnit) => (unit === 'ft' ? 12 * value * mmPerUnit.in : value * mmPerUnit[unit])
 
 const unitWords: readonly (readonly [NamedUnit, RegExp])[] = [
   ['ft', /^('|ft\.?|feet|foot)/],
@@ -115,9 +117,9 @@ function withPoint(digits: string, unit: NamedUnit): string {
 function toMm(parts: readonly Part[], unit: LengthUnit): number {
   const [first, second, third] = parts
   if (first === undefined || third !== undefined) throw new NotUnderstood('')
-  if (second === undefined) return (first.value * tenthsPerUnit[first.unit ?? unit]) / 10
+  if (second === undefined) return mmOf(first.value, first.unit ?? unit)
   if (first.unit !== 'ft' || (second.unit !== 'in' && second.unit !== null)) throw new NotUnderstood('')
   if (!Number.isInteger(first.value)) throw new NotUnderstood('Feet with a fraction and inches as well cannot both be meant.')
   if (second.value >= 12) throw new NotUnderstood('There are 12 inches in a foot, so inches after feet stay under 12.')
-  return (first.value * tenthsPerUnit.ft + second.value * tenthsPerUnit.in) / 10
+  return mmOf(first.value * 12 + second.value, 'in')
 }

@@ -1,5 +1,4 @@
 import type { ConductorUnit, LengthUnit } from './model/job.ts'
-import { tenthsPerUnit } from './parseLength.ts'
 
 export type { ConductorUnit, LengthUnit }
 
@@ -19,11 +18,11 @@ export const mmToInches = (mm: number) => mm / mmPerInch
 /** Millimetres as metres, a real number; not rounded. */
 export const mmToMetres = (mm: number) => mm / mmPerMetre
 /** Feet as whole millimetres, the form in which lengths are stored. */
-export const feetToMm = (feet: number) => Math.round((feet * tenthsPerUnit.ft) / 10)
+export const feetToMm = (feet: number) => Math.round(feet * 12 * mmPerInch)
 /** Inches as whole millimetres. */
-export const inchesToMm = (inches: number) => Math.round((inches * tenthsPerUnit.in) / 10)
+export const inchesToMm = (inches: number) => Math.round(inches * mmPerInch)
 /** Metres as whole millimetres. */
-export const metresToMm = (metres: number) => Math.round((metres * tenthsPerUnit.m) / 10)
+export const metresToMm = (metres: number) => Math.round(metres * mmPerMetre)
 
 export interface LengthFormat {
   /** whole: the nearest foot or metre, for lists. exact: feet, inches and sixteenths, or metres to the millimetre. */

@@ -127,7 +127,7 @@ describe('parseLength', () => {
   it('reads back 20,000 sixteenths of an inch as they were written', () => {
     const wrong: string[] = []
     for (let sixteenths = 0; sixteenths < 20_000; sixteenths++) {
-      const mm = inchesToMm(sixteenths / 16)
+      const mm = Math.round((sixteenths * 25.4) / 16)
       const text = formatLength(mm, 'ft', { as: 'exact' })
       if (mmOf(text) !== mm) wrong.push(text)
     }
