@@ -48,8 +48,8 @@ export const coordinateMmSchema = z
 export const pointSchema = z.strictObject({ xMm: coordinateMmSchema, yMm: coordinateMmSchema })
 export type Point = z.infer<typeof pointSchema>
 
-/** When something happened by the clock of whoever said so: a claim, in UTC; the order is always the log's. */
-export const momentSchema = z.iso.datetime({ message: 'A moment is a UTC date and time' })
+/** When something happened by the clock of whoever said so: a claim, in UTC to the millisecond; the order is always the log's. */
+export const momentSchema = z.iso.datetime({ precision: 3, message: 'A moment is a UTC date and time to the millisecond' })
 
 /** A position in a face or a sequence, from 1. */
 export const positionSchema = z.int().min(1).max(999)
