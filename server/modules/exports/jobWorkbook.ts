@@ -3,11 +3,12 @@ import ExcelJS from 'exceljs'
 import type { Finding } from '../../../shared/checks/finding.ts'
 import type { RunFacts } from '../../../shared/derive/facts.ts'
 import { printCounts } from '../../../shared/labels/labelItems.ts'
+import type { Pull } from '../../../shared/model/fieldRecord.ts'
 import { jobOf, type JobDocument } from '../../../shared/model/jobDocument.ts'
 import { endLabel } from '../../../shared/model/naming.ts'
 import { mmPerFoot, mmPerMetre, type LengthUnit } from '../../../shared/units.ts'
 import { cableTotals, type CableTotal } from '../../../shared/views/cableTotals.ts'
-import { compareLabels, scheduleRows, type ScheduleRow } from '../../../shared/views/scheduleRows.ts'
+import { compareLabels, lastPulls, scheduleRows, type ScheduleRow } from '../../../shared/views/scheduleRows.ts'
 import { writeSheet, type Column } from './sheet.ts'
 
 export interface WorkbookSource {
@@ -114,6 +115,7 @@ const pullOrder = (rows: readonly ScheduleRow[]) =>
 /** At most seven columns, and room to write the marks: what a crew carries. */
 function pullColumns(doc: JobDocument, unit: LengthUnit): Column<ScheduleRow>[] {
   const length = figure(unit)
+  const pulls = lastPulls(doc)
   return [
     { head: 'Run, both ends', width: 16, value: (row) => row.label },
     { head: 'Cable, jacket', width: 18, value: (row) => [row.cable, row.jacket].filter(Boolean).join(' ') },
@@ -121,15 +123,11 @@ function pullColumns(doc: JobDocument, unit: LengthUnit): Column<ScheduleRow>[] 
     { head: 'To', width: 30, value: (row) => [row.room, row.plate].join(', ') },
     { head: 'For', width: 26, value: (row) => row.device },
     { head: `Plan, ${unit}`, width: 9, format: lengthFormat(unit), value: (row) => length(row.lengthMm) },
-    { head: 'Jacket marks: rack, plate', width: 24, value: (row) => marksOf(doc, row.runId) },
+    { head: 'Jacket marks: rack, plate', width: 24, value: (row) => marksOf(pulls.get(row.runId)) },
   ]
 }
 
-function marksOf(doc: JobDocument, runId: string): string {
-  let marks = ''
-  for (const pull of doc.records.pull.values()) if (pull.runId === runId && pull.markA !== null && pull.markB !== null) marks = `${pull.markA} to ${pull.markB} ${pull.markUnit}`
-  return marks
-}
+const marksOf = (pull: Pull | undefined) => (pull && pull.markA !== null && pull.markB !== null ? `${pull.markA} to ${pull.markB} ${pull.markUnit}` : '')
 
 function totalColumns(unit: LengthUnit): Column<CableTotal>[] {
   const length = figure(unit)
