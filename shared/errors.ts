@@ -6,6 +6,7 @@ export const ErrorCode = {
   notFound: 'not_found',
   conflict: 'conflict',
   refused: 'refused',
+  commandIdReused: 'command_id_reused',
   tooLarge: 'too_large',
   tooMany: 'too_many',
   unavailable: 'unavailable',
