@@ -1,0 +1,23 @@
+/** Lengths gathered by size, from the longest: the form in which packing is searched. */
+export interface SizeStock {
+  sizes: readonly number[]
+  counts: readonly number[]
+}
+
+/** Gathers lengths by size, longest first. */
+export function gatherSizes(lengths: readonly number[]): SizeStock {
+  const counts = new Map<number, number>()
+  for (const length of lengths) counts.set(length, (counts.get(length) ?? 0) + 1)
+  const sizes = [...counts.keys()].sort((a, b) => b - a)
+  return { sizes, counts: sizes.map((size) => counts.get(size) ?? 0) }
+}
+
+/** Whether pieces can be cut at all: positive finite lengths, none longer than the spool. */
+export function canBeCut(lengths: readonly number[], capacity: number): boolean {
+  return Number.isFinite(capacity) && capacity > 0 && lengths.every((length) => length > 0 && length <= capacity)
+}
+
+/** Whether a run is longer than what it would be cut from; runs may not be spliced. Null: a value that is no number. */
+export function isTooLong(lengthMm: number, putUpMm: number): boolean | null {
+  return Number.isFinite(lengthMm) && Number.isFinite(putUpMm) && lengthMm >= 0 && putUpMm >= 0 ? lengthMm > putUpMm : null
+}
