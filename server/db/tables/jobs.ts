@@ -13,6 +13,7 @@ export const jobs = mysqlTable(
     id: idColumn('id').notNull(),
     version: int('version').notNull().default(0),
     createdAt: datetime('created_at', { mode: 'string', fsp: 3 }).notNull(),
+    createdById: idColumn('created_by_id').notNull(),
     name: varchar('name', { length: 80 }).notNull(),
     client: varchar('client', { length: 80 }).notNull(),
     address: varchar('address', { length: 160 }).notNull(),
@@ -26,6 +27,7 @@ export const jobs = mysqlTable(
   (table) => [
     primaryKey({ columns: [table.companyId, table.id] }),
     foreignKey({ name: 'jobs_company', columns: [table.companyId], foreignColumns: [companies.id] }),
+    foreignKey({ name: 'jobs_member', columns: [table.companyId, table.createdById], foreignColumns: [members.companyId, members.id] }),
   ],
 )
 
