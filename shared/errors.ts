@@ -7,6 +7,7 @@ export const ErrorCode = {
   conflict: 'conflict',
   refused: 'refused',
   commandIdReused: 'command_id_reused',
+  mediaType: 'media_type',
   tooLarge: 'too_large',
   tooMany: 'too_many',
   unavailable: 'unavailable',

@@ -1,0 +1,36 @@
+/** Numbers of MariaDB's errors that the program acts on. */
+export const dbErrno = { duplicate: 1062, reference: 1452, referenced: 1451, check: 4025, lockWait: 1205, deadlock: 1213, snapshotConflict: 1020, statementTimeout: 1969 } as const
+
+const lost = new Set(['ECONNREFUSED', 'ECONNRESET', 'PROTOCOL_CONNECTION_LOST', 'ETIMEDOUT', 'EPIPE', 'ENOTFOUND', 'PROTOCOL_SEQUENCE_TIMEOUT', 'ER_SERVER_SHUTDOWN', 'EAI_AGAIN'])
+
+interface DriverError {
+  readonly errno?: number
+  readonly code?: string
+  readonly message?: string
+}
+
+/** The driver's own error under whatever Drizzle has wrapped round it. */
+function driverError(error: unknown): DriverError {
+  let current: unknown = error
+  for (let depth = 0; depth < 5 && current instanceof Error; depth++) {
+    if ('errno' in current || ('code' in current && typeof current.code === 'string' && lost.has(current.code))) return current as DriverError
+    current = current.cause
+  }
+  return {}
+}
+
+export const errnoOf = (error: unknown): number | undefined => driverError(error).errno
+
+/** Whether doing the same again may work: another transaction was in the way. */
+export const isTransient = (error: unknown): boolean => {
+  const errno = errnoOf(error)
+  return errno === dbErrno.deadlock || errno === dbErrno.lockWait || errno === dbErrno.snapshotConflict
+}
+
+/** Whether the database could not be reached or did not answer in time. */
+export function isUnavailable(error: unknown): boolean {
+  const { code, errno } = driverError(error)
+  if (code !== undefined && lost.has(code)) return true
+  if (errno === dbErrno.statementTimeout || errno === 1053 || errno === 1040) return true
+  return error instanceof Error && /queue limit reached|pool is closed|connection is in closed state/i.test(`${error.message} ${error.cause instanceof Error ? error.cause.message : ''}`)
+}

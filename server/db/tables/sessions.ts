@@ -1,0 +1,23 @@
+import { bigint, index, int, mysqlTable, text, varchar } from 'drizzle-orm/mysql-core'
+import { idColumn } from '../columns.ts'
+
+/** Signed-in sessions, by the hash of their id: whoever reads the table cannot take one over. Times in ms since 1970. */
+export const sessions = mysqlTable(
+  'sessions',
+  {
+    idHash: idColumn('id_hash').primaryKey(),
+    companyId: idColumn('company_id'),
+    memberId: idColumn('member_id'),
+    data: text('data').notNull(),
+    createdAt: bigint('created_at', { mode: 'number' }).notNull(),
+    idleUntil: bigint('idle_until', { mode: 'number' }).notNull(),
+  },
+  (table) => [index('sessions_member').on(table.companyId, table.memberId), index('sessions_idle').on(table.idleUntil)],
+)
+
+/** Failed sign-ins within a window, by e-mail or by address of the caller. */
+export const signInAttempts = mysqlTable('sign_in_attempts', {
+  subject: varchar('subject', { length: 80 }).primaryKey(),
+  failures: int('failures').notNull(),
+  windowEnds: bigint('window_ends', { mode: 'number' }).notNull(),
+})
