@@ -11,10 +11,10 @@ import { registerRoutes } from './http/registerRoutes.ts'
 import type { Route } from './http/routeTable.ts'
 import { sameOrigin } from './http/sameOrigin.ts'
 import { absoluteMs, DatabaseSessionStore } from './http/sessionStore.ts'
-import { allRoutes } from './routes.ts'
+import { buildRoutes } from './routes.ts'
 
 /** The whole application, in the order a request meets it. It does not listen; whoever starts it does. */
-export function createApp(deps: AppDeps, routes: readonly Route[] = allRoutes): Express {
+export function createApp(deps: AppDeps, routes: readonly Route[] = buildRoutes(deps)): Express {
   const app = express()
   app.set('query parser', 'simple')
   app.set('x-powered-by', false)

@@ -1,6 +1,6 @@
 import { and, count, eq, or } from 'drizzle-orm'
 import type { Job } from '../../../shared/model/job.ts'
-import type { Db, Tx } from '../../db/client.ts'
+import type { Db, Session, Tx } from '../../db/client.ts'
 import { jobRecordOf, jobRow } from '../../db/rows/jobRows.ts'
 import { momentColumn, momentOf } from '../../db/rows/leafs.ts'
 import { runs } from '../../db/tables/cabling.ts'
@@ -17,7 +17,7 @@ export async function lockJob(tx: Tx, scope: JobScope): Promise<number | undefin
 }
 
 /** A job's version, or undefined where the company has no such job. */
-export async function versionOf(db: Db | Tx, scope: JobScope): Promise<number | undefined> {
+export async function versionOf(db: Session, scope: JobScope): Promise<number | undefined> {
   const [row] = await db.select({ version: jobs.version }).from(jobs).where(isJob(scope))
   return row?.version
 }
@@ -39,14 +39,14 @@ export interface NewJob {
   readonly createdAt: string
 }
 
-export async function insertJob(tx: Tx, { companyId, job, createdById, createdAt }: NewJob): Promise<void> {
+export async function insertJob(tx: Session, { companyId, job, createdById, createdAt }: NewJob): Promise<void> {
   await tx.insert(jobs).values({ companyId, ...jobRow(job), createdById, createdAt: momentColumn(createdAt) })
 }
 
-/** A job's own record and its version, or undefined. */
-export async function findJob(db: Db | Tx, scope: JobScope): Promise<{ job: Job; version: number } | undefined> {
+/** A job's own record, its version and who made it, or undefined. */
+export async function findJob(db: Session, scope: JobScope): Promise<{ job: Job; version: number; createdById: string } | undefined> {
   const [row] = await db.select().from(jobs).where(isJob(scope))
-  return row && { job: jobRecordOf(row), version: row.version }
+  return row && { job: jobRecordOf(row), version: row.version, createdById: row.createdById }
 }
 
 /** What the list of jobs shows of each, and the last entry of its log. Four statements for any number of jobs. */

@@ -1,7 +1,7 @@
 import { and, asc, eq, gt, inArray, lte, ne } from 'drizzle-orm'
 import type { LogEntry } from '../../../shared/api/jobs.ts'
 import type { LoggedChange } from '../../../shared/sync/conflict.ts'
-import type { Db, Tx } from '../../db/client.ts'
+import type { Session, Tx } from '../../db/client.ts'
 import { momentColumn, momentOf } from '../../db/rows/leafs.ts'
 import { jobLog } from '../../db/tables/jobs.ts'
 import type { JobScope } from './documentRepo.ts'
@@ -18,7 +18,7 @@ export async function appendLog(tx: Tx, scope: JobScope, entry: NewEntry): Promi
 }
 
 /** What happened after a version, in order, the first `limit` entries. */
-export async function logSince(db: Db | Tx, scope: JobScope, version: number, limit: number): Promise<LogEntry[]> {
+export async function logSince(db: Session, scope: JobScope, version: number, limit: number): Promise<LogEntry[]> {
   const rows = await db
     .select({ version: jobLog.version, commandId: jobLog.commandId, actorId: jobLog.actorId, verb: jobLog.verb, label: jobLog.label, at: jobLog.at, change: jobLog.change })
     .from(jobLog)
@@ -46,7 +46,7 @@ export interface KnownCommand {
 }
 
 /** Which of these command ids the log knows, with what was sent under them. */
-export async function knownCommands(db: Db | Tx, scope: JobScope, commandIds: readonly string[]): Promise<KnownCommand[]> {
+export async function knownCommands(db: Session, scope: JobScope, commandIds: readonly string[]): Promise<KnownCommand[]> {
   if (!commandIds.length) return []
   return db
     .select({ commandId: jobLog.commandId, version: jobLog.version, actorId: jobLog.actorId, verb: jobLog.verb, args: jobLog.args })
