@@ -1,0 +1,53 @@
+import type { Device, Terminal } from '../model/device.ts'
+import type { Cord, EndName, Run, RunEnd } from '../model/run.ts'
+import { endKey } from './jobIndex.ts'
+import type { JobReader } from './jobReader.ts'
+
+/** A device, its model's category, and one of its terminals, read so that edits to any of them are noticed. */
+export interface TerminalAt {
+  readonly device: Device
+  readonly category: string
+  readonly terminal: Terminal
+}
+
+export function terminalAt(reader: JobReader, deviceId: string, key: string | null): TerminalAt | undefined {
+  const device = reader.find('device', deviceId)
+  const model = reader.find('deviceModel', device?.modelId)
+  const terminal = key === null ? undefined : model?.terminals.find((each) => each.key === key)
+  return device && model && terminal ? { device, category: model.category, terminal } : undefined
+}
+
+/** Runs whose end is exactly here, with which end it is; dropped runs are not there. */
+export function runsOn(reader: JobReader, end: RunEnd): { run: Run; end: EndName }[] {
+  const key = endKey(end)
+  return reader
+    .under<Run>(`runs on ${key}`)
+    .filter((run) => run.dropped === null)
+    .flatMap((run) => (['a', 'b'] as const).filter((name) => run[name] && endKey(run[name]!) === key).map((name) => ({ run, end: name })))
+}
+
+/** Cords plugged in exactly here, with their far ends. */
+export function cordsOn(reader: JobReader, end: { plateId: string; jackId: string } | { deviceId: string; terminal: string }): { cord: Cord; far: Cord['a'] }[] {
+  const key = endKey(end)
+  return reader.under<Cord>(`cords on ${key}`).map((cord) => ({ cord, far: endKey(cord.a) === key ? cord.b : cord.a }))
+}
+
+/** The rack an end is at, by id: the rack itself or what stands in it. */
+export function rackOf(reader: JobReader, end: RunEnd | null): string | undefined {
+  if (!end) return undefined
+  if ('rackId' in end) return end.rackId
+  return 'deviceId' in end ? (reader.find('device', end.deviceId)?.rackId ?? undefined) : undefined
+}
+
+/**
+ * The end that a signal comes from: at the rack where just one end is; else the terminal that gives out; else end a.
+ */
+export function sourceEnd(reader: JobReader, run: Run): EndName {
+  const rackA = rackOf(reader, run.a) !== undefined
+  const rackB = rackOf(reader, run.b) !== undefined
+  if (rackA !== rackB) return rackA ? 'a' : 'b'
+  const gives = (end: RunEnd | null) => end !== null && 'deviceId' in end && terminalAt(reader, end.deviceId, end.terminal)?.terminal.direction === 'out'
+  return gives(run.b) && !gives(run.a) ? 'b' : 'a'
+}
+
+export const farEnd = (end: EndName): EndName => (end === 'a' ? 'b' : 'a')
