@@ -20,12 +20,15 @@ export const limitsSchema = z.strictObject({
   speakerLossStop: share.default(1),
   /** Conductor temperature for resistance, degrees Celsius. */
   conductorTemperatureC: z.number().min(-40).max(90).default(20),
-  /** Permanent link of a twisted-pair run, mm. */
+  /** Permanent link of a twisted-pair run, mm: above the first a caution, above the second a stop. */
+  dataLinkCautionMm: z.int().min(1000).max(200_000).default(79_248),
   dataLinkMm: z.int().min(1000).max(200_000).default(90_000),
   /** Channel of a twisted-pair run with its cords, mm. */
   dataChannelMm: z.int().min(1000).max(200_000).default(100_000),
   /** Share of an amplifier's power that constant-voltage taps may add up to, percent. */
   lineLoadShare: share.default(80),
+  /** What kind of building it is: dwellings for one or two families are let off some jacket rules. */
+  occupancy: z.enum(['one or two family', 'multifamily', 'other']).default('one or two family'),
 })
 export type Limits = z.infer<typeof limitsSchema>
 

@@ -17,7 +17,7 @@ export const residentialGrades: Record<ResidentialGrade, GradeCables> = {
 
 /** Cables for so many locations of one grade. Null: a count that is no whole number, or negative. Source above. */
 export function cablesForGrade(grade: ResidentialGrade, locations: number): GradeCables | null {
-  if (!Number.isInteger(locations) || locations < 0) return null
+  if (!Number.isSafeInteger(locations) || locations < 0) return null
   const { twistedPair, coaxial, optionalFibre } = residentialGrades[grade]
   return { twistedPair: twistedPair * locations, coaxial: coaxial * locations, optionalFibre: optionalFibre * locations }
 }

@@ -4,6 +4,6 @@
  */
 export function code128Check(start: number, values: readonly number[]): number | null {
   if (![103, 104, 105].includes(start)) return null
-  if (!values.every((value) => Number.isInteger(value) && value >= 0 && value <= 102)) return null
+  if (!values.every((value) => Number.isSafeInteger(value) && value >= 0 && value <= 102)) return null
   return values.reduce((sum, value, place) => (sum + (place + 1) * value) % 103, start % 103)
 }

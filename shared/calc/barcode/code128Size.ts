@@ -11,7 +11,7 @@ export const usualLeastModuleMm = 0.19
  * Null: a count that is no whole number, or negative. Source: ISO/IEC 15417.
  */
 export function code128Modules(characters: number): number | null {
-  return Number.isInteger(characters) && characters >= 0 ? finite(11 * characters + 35) : null
+  return Number.isSafeInteger(characters) && characters >= 0 ? finite(11 * characters + 35) : null
 }
 
 /** Width of a symbol with both quiet zones, mm. Null as above, or a module that is not above nothing. */

@@ -7,7 +7,7 @@ export const qrVersions = 40
  * 5 1/2, a byte 8, a kanji 13. Null: a version that is no whole number from 1 to 40. Source beside the table.
  */
 export function qrCapacity(version: number, level: QrLevel, mode: QrMode): number | null {
-  const codewords = Number.isInteger(version) ? qrDataCodewords[level][version - 1] : undefined
+  const codewords = Number.isSafeInteger(version) ? qrDataCodewords[level][version - 1] : undefined
   if (codewords === undefined) return null
   const bits = 8 * codewords - 4 - qrCountBits[mode][version <= 9 ? 0 : version <= 26 ? 1 : 2]
   switch (mode) {
@@ -24,7 +24,7 @@ export function qrCapacity(version: number, level: QrLevel, mode: QrMode): numbe
 
 /** Smallest version that holds so many characters. Null: none does, or a count that is no whole number. */
 export function qrVersionFor(characters: number, level: QrLevel, mode: QrMode = 'byte'): number | null {
-  if (!Number.isInteger(characters) || characters < 0) return null
+  if (!Number.isSafeInteger(characters) || characters < 0) return null
   for (let version = 1; version <= qrVersions; version++) {
     if ((qrCapacity(version, level, mode) ?? 0) >= characters) return version
   }

@@ -10,7 +10,7 @@ export interface QrSide {
 
 /** Modules along one side: 4 x version + 17. Null: a version that is no whole number from 1 to 40. Source: ISO/IEC 18004. */
 export function qrSide(version: number): QrSide | null {
-  if (!Number.isInteger(version) || version < 1 || version > qrVersions) return null
+  if (!Number.isSafeInteger(version) || version < 1 || version > qrVersions) return null
   const modules = 4 * version + 17
   return { modules, withQuietZone: modules + 8 }
 }

@@ -9,7 +9,7 @@ export const tableAmbientC = 30
  * Null: more than 192 cables (an engineer's work), a count that is no whole number, or no entry. Source beside the table.
  */
 export function bundleAmpacityA(awg: BundleGauge, cables: number, ratingC: CableRatingC): number | null {
-  if (!Number.isInteger(cables) || cables < 1) return null
+  if (!Number.isSafeInteger(cables) || cables < 1) return null
   return bundleAmpacityTable[awg][ratingC][bundleColumns.findIndex((most) => cables <= most)] ?? null
 }
 

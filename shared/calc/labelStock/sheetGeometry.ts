@@ -10,7 +10,7 @@ export interface Extent {
 function isUsableSheet(sheet: LabelSheet): boolean {
   const { columns, rows, labelWidthMm, labelHeightMm, leftMm, topMm, gapXMm, gapYMm } = sheet
   return (
-    Number.isInteger(columns) && Number.isInteger(rows) && columns >= 1 && rows >= 1 &&
+    Number.isSafeInteger(columns) && Number.isSafeInteger(rows) && columns >= 1 && rows >= 1 &&
     usable(labelWidthMm, labelHeightMm, leftMm, topMm, gapXMm, gapYMm) && labelWidthMm > 0 && labelHeightMm > 0 &&
     leftMm >= 0 && topMm >= 0 && gapXMm >= 0 && gapYMm >= 0
   )
@@ -42,7 +42,7 @@ export interface LabelOrigin {
 
 /** Upper left corner of a label, mm, row and column from 0. Null: a place the sheet does not have, or as above. */
 export function labelOrigin(sheet: LabelSheet, row: number, column: number): LabelOrigin | null {
-  if (!isUsableSheet(sheet) || !Number.isInteger(row) || !Number.isInteger(column)) return null
+  if (!isUsableSheet(sheet) || !Number.isSafeInteger(row) || !Number.isSafeInteger(column)) return null
   if (row < 0 || column < 0 || row >= sheet.rows || column >= sheet.columns) return null
   return {
     xMm: sheet.leftMm + column * (sheet.labelWidthMm + sheet.gapXMm),
@@ -72,7 +72,7 @@ export interface PrintSettings {
 export function labelPlace(sheet: LabelSheet, ordinal: number, settings: PrintSettings): LabelPlace | null {
   const { startAt, offsetXMm = 0, offsetYMm = 0 } = settings
   const perSheet = sheet.columns * sheet.rows
-  if (!Number.isInteger(ordinal) || ordinal < 0 || !Number.isInteger(startAt) || startAt < 1 || startAt > perSheet) return null
+  if (!Number.isSafeInteger(ordinal) || ordinal < 0 || !Number.isSafeInteger(startAt) || startAt < 1 || startAt > perSheet) return null
   const place = ordinal + startAt - 1
   const onSheet = place % perSheet
   const row = Math.floor(onSheet / sheet.columns)

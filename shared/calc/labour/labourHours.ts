@@ -27,6 +27,6 @@ export function hoursByLength(lengthMm: number, hoursPerThousandFeet: number): n
 
 /** Whole days for a crew: ceil(hours / (crew x 8)). Null: no number, negative hours, or a crew that is no whole number. */
 export function crewDays(hours: number, crew: number, hoursADay: number = workdayHours): number | null {
-  if (!usable(hours, hoursADay) || hours < 0 || hoursADay <= 0 || !Number.isInteger(crew) || crew < 1) return null
+  if (!usable(hours, hoursADay) || hours < 0 || hoursADay <= 0 || !Number.isSafeInteger(crew) || crew < 1) return null
   return finite(ceilOf(hours / (crew * hoursADay)))
 }

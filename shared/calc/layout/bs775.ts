@@ -39,7 +39,7 @@ export function isBs775Height(channel: Bs775Channel, heightM: number, tiltDownDe
  * stand at 110. Null: a count that is not even or not above nothing. Source: ITU-R BS.775-3.
  */
 export function surroundAzimuthsDeg(count: number): number[] | null {
-  if (!Number.isInteger(count) || count < 2 || count % 2 !== 0) return null
+  if (!Number.isSafeInteger(count) || count < 2 || count % 2 !== 0) return null
   const perSide = count / 2
   const step = (bs775SurroundArc.toDeg - bs775SurroundArc.fromDeg) / Math.max(1, perSide - 1)
   const left = perSide === 1 ? [110] : Array.from({ length: perSide }, (_, place) => bs775SurroundArc.fromDeg + place * step)

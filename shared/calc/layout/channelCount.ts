@@ -24,7 +24,7 @@ export function channelCount(format: string, subwoofersNeedAmplifier = false): C
  * Null: a format that cannot be read, or a count of zones that is no whole number. Common practice, no source.
  */
 export function amplifierChannels(theatres: readonly string[], stereoZones: number, subwoofersNeedAmplifier = false): number | null {
-  if (!Number.isInteger(stereoZones) || stereoZones < 0) return null
+  if (!Number.isSafeInteger(stereoZones) || stereoZones < 0) return null
   let total = 2 * stereoZones
   for (const format of theatres) {
     const count = channelCount(format, subwoofersNeedAmplifier)

@@ -22,6 +22,6 @@ export const averagingDefaults = { slackMm: 1100, dropMm: 4500 } as const
  */
 export function averagedTotalMm({ shortestMm, longestMm, slackMm, dropMm, runs }: AveragedRuns): number | null {
   if (!usable(shortestMm, longestMm, slackMm, dropMm, runs)) return null
-  if (shortestMm < 0 || longestMm < shortestMm || slackMm < 0 || dropMm < 0 || runs < 0 || !Number.isInteger(runs)) return null
+  if (shortestMm < 0 || longestMm < shortestMm || slackMm < 0 || dropMm < 0 || runs < 0 || !Number.isSafeInteger(runs)) return null
   return finite(((shortestMm + longestMm) / 2 + slackMm + dropMm) * runs)
 }

@@ -6,7 +6,7 @@ import { finite, usable } from '../usable.ts'
  * run of nothing, a run longer than the box, or a count that is no whole number. Derived.
  */
 export function boxesByRuns(boxMm: number, runMm: number, runs: number): number | null {
-  if (!usable(boxMm, runMm, runs) || boxMm <= 0 || runMm <= 0 || runs < 0 || !Number.isInteger(runs)) return null
+  if (!usable(boxMm, runMm, runs) || boxMm <= 0 || runMm <= 0 || runs < 0 || !Number.isSafeInteger(runs)) return null
   const perBox = floorOf(boxMm / runMm)
   return perBox < 1 ? null : finite(Math.ceil(runs / perBox))
 }
@@ -16,6 +16,6 @@ export function boxesByRuns(boxMm: number, runMm: number, runs: number): number 
  * runs of 210 ft are two boxes here and need three. Null as above. Derived.
  */
 export function boxesByTotal(boxMm: number, runMm: number, runs: number): number | null {
-  if (!usable(boxMm, runMm, runs) || boxMm <= 0 || runMm <= 0 || runs < 0 || !Number.isInteger(runs)) return null
+  if (!usable(boxMm, runMm, runs) || boxMm <= 0 || runMm <= 0 || runs < 0 || !Number.isSafeInteger(runs)) return null
   return finite(ceilOf((runs * runMm) / boxMm))
 }

@@ -11,6 +11,6 @@ export const precutStudsIn = { eightFoot: 92.625, nineFoot: 104.625 } as const
  * a count of plates that is no whole number. Derived.
  */
 export function framedWallHeightIn(studIn: number, plates: number): number | null {
-  if (!usable(studIn, plates) || studIn <= 0 || plates < 0 || !Number.isInteger(plates)) return null
+  if (!usable(studIn, plates) || studIn <= 0 || plates < 0 || !Number.isSafeInteger(plates)) return null
   return finite(studIn + plates * plateThicknessIn)
 }

@@ -11,7 +11,7 @@ const shares = { one: 0.53, two: 0.31, more: 0.4, nipple: 0.6 } as const
  * Null: a count that is no whole number above nothing. Source: NEC Chapter 9 Table 1.
  */
 export function fillLimitShare(cables: number, isNipple = false): number | null {
-  if (!Number.isInteger(cables) || cables < 1) return null
+  if (!Number.isSafeInteger(cables) || cables < 1) return null
   if (isNipple) return shares.nipple
   return cables === 1 ? shares.one : cables === 2 ? shares.two : shares.more
 }

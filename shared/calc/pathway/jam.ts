@@ -16,6 +16,6 @@ export function jamRatio(insideDiameterIn: number, outerDiameterIn: number): num
 /** Whether cables may jam: exactly three of them and a ratio of 2.8 to 3.2. Null as above. Source as above. */
 export function mayJam(insideDiameterIn: number, outerDiameterIn: number, cables: number): boolean | null {
   const ratio = jamRatio(insideDiameterIn, outerDiameterIn)
-  if (ratio === null || !Number.isInteger(cables) || cables < 0) return null
+  if (ratio === null || !Number.isSafeInteger(cables) || cables < 0) return null
   return cables === 3 && ratio >= jamBand.from - 1e-9 && ratio <= jamBand.to + 1e-9
 }

@@ -16,7 +16,7 @@ export function separationEn50174Mm(segregation: SegregationClass, containment: 
 
 /** Factor P for a count of circuits; 0 for none. Null as above. */
 export function circuitFactor(circuits: number): number | null {
-  if (!Number.isInteger(circuits) || circuits < 0) return null
+  if (!Number.isSafeInteger(circuits) || circuits < 0) return null
   if (circuits === 0) return 0
   return circuitFactors.find(({ upTo }) => circuits <= upTo)?.factor ?? circuitFactorAbove
 }

@@ -34,5 +34,5 @@ function fit(lengths: readonly number[], capacity: number, choose: (rooms: reado
 
 /** Most spools that first-fit decreasing takes where `fewest` would do: floor(11/9 n + 6/9). Null: no whole number. Dosa 2007. */
 export function firstFitGuarantee(fewest: number): number | null {
-  return Number.isInteger(fewest) && fewest >= 0 ? Math.floor((11 * fewest + 6) / 9) : null
+  return Number.isSafeInteger(fewest) && fewest >= 0 ? Math.floor((11 * fewest + 6) / 9) : null
 }

@@ -1,0 +1,109 @@
+import { lineLoadPercent, parallelOhm, withinLimit } from '../calc/speaker/load.ts'
+import { cordsOn, runsOn, sourceEnd } from '../derive/ends.ts'
+import type { JobReader } from '../derive/jobReader.ts'
+import { speakerLoad, type SpeakerLoad } from '../derive/speakerFacts.ts'
+import type { Device, DeviceModel, Terminal } from '../model/device.ts'
+import type { Run } from '../model/run.ts'
+import { formatNumber } from '../units.ts'
+import { defineCheck, type Draft } from './define.ts'
+
+interface Fed {
+  readonly run: Run
+  readonly load: SpeakerLoad
+}
+
+/** The runs a channel feeds: on the terminal itself, and on panel ports its cords go to. */
+function fedBy(reader: JobReader, device: Device, terminal: Terminal): Fed[] {
+  const at = { deviceId: device.id, terminal: terminal.key }
+  const ends = [at, ...cordsOn(reader, at).map(({ far }) => far)]
+  return ends.flatMap((end) =>
+    runsOn(reader, end).flatMap(({ run, end: name }) => {
+      const type = reader.find('cableType', run.cableTypeId)
+      const load = type && sourceEnd(reader, run) === name ? speakerLoad(reader, run, type) : null
+      return load ? [{ run, load }] : []
+    }),
+  )
+}
+
+const channelsOf = (model: DeviceModel) => model.terminals.filter((terminal) => terminal.direction === 'out' && (terminal.signal === 'speaker' || terminal.signal === 'speaker-line'))
+
+export const amplifierLoad = defineCheck({
+  id: 'amplifierLoad',
+  title: 'Amplifier load',
+  what: 'The load on each channel against the amplifier’s lowest, taps against its power, and speakers without a tap on a line',
+  tier: 'practice',
+  source: 'Lowest load as the model states; taps within 80 % of the amplifier (commercial-audio article, otherwise common practice)',
+  about: 'device',
+  limits: ({ lineLoadShare }) => [
+    { severity: 'stop', text: 'under the lowest load, or a speaker without a tap' },
+    { severity: 'caution', text: `taps over ${lineLoadShare} %` },
+  ],
+  look: (reader, device) => {
+    const model = reader.find('deviceModel', device.modelId)
+    if (!model || (model.category !== 'amplifier' && model.category !== 'receiver')) return []
+    const channels = channelsOf(model).map((terminal) => ({ terminal, fed: fedBy(reader, device, terminal) }))
+    return [...channels.flatMap((channel) => tooLow(device, channel)), ...channels.flatMap((channel) => untapped(device, channel)), ...overTapped(reader, device, model, channels)]
+  },
+})
+
+interface Channel {
+  readonly terminal: Terminal
+  readonly fed: readonly Fed[]
+}
+
+function tooLow(device: Device, { terminal, fed }: Channel): Draft[] {
+  const least = terminal.ratings.minLoadOhm
+  const load = parallelOhm(fed.map((each) => each.load.loadOhm))
+  if (least === undefined || load === null || withinLimit(least, load)) return []
+  return [
+    {
+      severity: 'stop',
+      aboutName: `${device.name}, ${terminal.name}`,
+      sentence: `${terminal.name} of ${device.name} sees ${formatNumber(load, 1)} ohm; it may see no less than ${formatNumber(least, 1)} ohm.`,
+      advice: `Take a speaker off (${fed.map((each) => each.run.label).join(', ')}), or join them in series.`,
+      figure: { value: load, unit: 'ohm', text: `${formatNumber(load, 1)} ohm` },
+      limit: { value: least, unit: 'ohm', text: `${formatNumber(least, 1)} ohm`, setBy: 'source' },
+      basis: `1/Z = ${fed.map((each) => `1/${formatNumber(each.load.loadOhm, 1)}`).join(' + ')}`,
+      figures: [terminal.key, load.toFixed(3), least].join('|'),
+    },
+  ]
+}
+
+function untapped(device: Device, { terminal, fed }: Channel): Draft[] {
+  const speakers = fed.flatMap((each) => each.load.untapped)
+  if (!speakers.length) return []
+  const names = speakers.map((each) => each.device.name).join(', ')
+  return [
+    {
+      severity: 'stop',
+      aboutName: `${device.name}, ${terminal.name}`,
+      sentence: `${names} ${speakers.length === 1 ? 'has' : 'have'} no tap chosen: on a constant-voltage line a speaker on its low impedance shorts the line.`,
+      advice: 'Choose a tap. A measured line impedance far below V²/P is the clue on site.',
+      basis: 'V²/P with P the sum of taps; a speaker of 8 ohm in parallel draws the line down',
+      figures: [terminal.key, names].join('|'),
+    },
+  ]
+}
+
+function overTapped(reader: JobReader, device: Device, model: DeviceModel, channels: readonly Channel[]): Draft[] {
+  const { lineLoadShare } = reader.job().limits
+  const tapsOf = (channel: Channel) => channel.fed.reduce((sum, each) => sum + (each.load.totalW ?? 0), 0)
+  const draft = (name: string, taps: number, power: number): Draft[] => {
+    const share = lineLoadPercent(taps, power)
+    if (share === null || taps === 0 || withinLimit(share, lineLoadShare)) return []
+    return [
+      {
+        severity: 'caution',
+        aboutName: name,
+        sentence: `Taps of ${formatNumber(taps, taps % 1 ? 1 : 0)} W on ${name} of ${formatNumber(power, 0)} W are ${formatNumber(share, 0)} %; the limit is ${formatNumber(lineLoadShare, 0)} %.`,
+        advice: 'Choose lower taps, or a larger amplifier.',
+        figure: { value: share, unit: '%', text: `${formatNumber(share, 0)} %` },
+        limit: { value: lineLoadShare, unit: '%', text: `${formatNumber(lineLoadShare, 0)} %`, setBy: 'job' },
+        basis: `sum of taps ${formatNumber(taps, 1)} W / ${formatNumber(power, 0)} W`,
+        figures: [name, taps, power, lineLoadShare].join('|'),
+      },
+    ]
+  }
+  if (model.sharedPowerW !== null) return draft(device.name, channels.reduce((sum, channel) => sum + tapsOf(channel), 0), model.sharedPowerW)
+  return channels.flatMap((channel) => (channel.terminal.ratings.powerW === undefined ? [] : draft(`${device.name}, ${channel.terminal.name}`, tapsOf(channel), channel.terminal.ratings.powerW)))
+}

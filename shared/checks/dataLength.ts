@@ -1,0 +1,51 @@
+import { withinLimit } from '../calc/speaker/load.ts'
+import { cordsOn } from '../derive/ends.ts'
+import type { JobReader } from '../derive/jobReader.ts'
+import { factsOf } from '../derive/runFacts.ts'
+import type { Run, RunEnd } from '../model/run.ts'
+import { formatLength } from '../units.ts'
+import { defineCheck, lengthText, type Draft } from './define.ts'
+
+export const dataLength = defineCheck({
+  id: 'dataLength',
+  title: 'Data run length',
+  what: 'A twisted-pair run as a permanent link, slack included, and with its cords as a channel',
+  tier: 'standard',
+  source: 'TIA-568: permanent link 90 m, channel 100 m (read in vendor pages and install guides, not in the standard itself)',
+  about: 'run',
+  limits: ({ dataLinkCautionMm, dataLinkMm, dataChannelMm }, unit) => [
+    { severity: 'caution', text: `over ${formatLength(dataLinkCautionMm, unit, { as: 'whole' })}` },
+    { severity: 'stop', text: `over ${formatLength(dataLinkMm, unit, { as: 'whole' })}, with cords ${formatLength(dataChannelMm, unit, { as: 'whole' })}` },
+  ],
+  look: (reader, run) => {
+    const { length } = factsOf(reader, run)
+    const type = reader.find('cableType', run.cableTypeId)
+    if (!length || type?.family !== 'twisted-pair') return []
+    const { limits } = reader.job()
+    const cordsMm = cordLength(reader, run)
+    const draft = (severity: Draft['severity'], what: string, valueMm: number, limitMm: number): Draft => ({
+      severity,
+      aboutName: run.label,
+      sentence: `${what} is ${lengthText(reader, valueMm)}; the limit is ${lengthText(reader, limitMm)}.`,
+      advice: severity === 'stop' ? 'Move the far end nearer, put a switch between, or use fiber.' : 'Check the route before it is pulled: slack and detours count.',
+      figure: { value: valueMm, unit: 'mm', text: lengthText(reader, valueMm) },
+      limit: { value: limitMm, unit: 'mm', text: lengthText(reader, limitMm), setBy: 'job' },
+      basis: `${length.basis} length ${lengthText(reader, length.totalMm)}, slack included${cordsMm ? `; cords ${lengthText(reader, cordsMm)}` : ''}`,
+      figures: [length.totalMm, cordsMm, limitMm].join('|'),
+    })
+    if (!withinLimit(length.totalMm, limits.dataLinkMm)) return [draft('stop', 'The run', length.totalMm, limits.dataLinkMm)]
+    if (!withinLimit(length.totalMm + cordsMm, limits.dataChannelMm)) return [draft('stop', 'The run with its cords', length.totalMm + cordsMm, limits.dataChannelMm)]
+    if (!withinLimit(length.totalMm, limits.dataLinkCautionMm)) return [draft('caution', 'The run', length.totalMm, limits.dataLinkCautionMm)]
+    return []
+  },
+})
+
+/** The cords at both ends together, mm; the longest where an end has several. */
+function cordLength(reader: JobReader, run: Run): number {
+  return longestCord(reader, run.a) + longestCord(reader, run.b)
+}
+
+function longestCord(reader: JobReader, end: RunEnd | null): number {
+  const at = end && 'plateId' in end && end.jackId !== null ? { plateId: end.plateId, jackId: end.jackId } : end && 'deviceId' in end && end.terminal !== null ? { deviceId: end.deviceId, terminal: end.terminal } : null
+  return at ? Math.max(0, ...cordsOn(reader, at).map(({ cord }) => cord.lengthMm)) : 0
+}

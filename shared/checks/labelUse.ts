@@ -1,0 +1,28 @@
+import type { Run } from '../model/run.ts'
+import { defineCheck } from './define.ts'
+
+export const labelUse = defineCheck({
+  id: 'labelUse',
+  title: 'Labels',
+  what: 'That a label names one cable, capitals or not',
+  tier: 'standard',
+  source: 'TIA-606: an identifier is unique (read in public summaries)',
+  about: 'run',
+  limits: () => [{ severity: 'stop', text: 'two alike' }],
+  look: (reader, run) => {
+    const same = reader.under<Run>(`label ${run.label.toUpperCase()}`)
+    const first = [...same].sort((a, b) => a.serial - b.serial)[0]
+    if (same.length < 2 || first?.id === run.id) return []
+    return [
+      {
+        severity: 'stop',
+        aboutName: run.label,
+        sentence: `${same.length} runs are labelled ${run.label}.`,
+        advice: 'Give this one a label of its own before it is printed.',
+        basis: `${same.length} runs carry this label`,
+        figures: [run.label, same.length].join('|'),
+        remedy: { label: 'Label it by the pattern', intent: { verb: 'run.relabel', args: { ids: [run.id] } } },
+      },
+    ]
+  },
+})
