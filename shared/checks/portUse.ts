@@ -49,15 +49,19 @@ function nextFree(reader: JobReader, at: RunEnd): RunEnd | null {
   if ('plateId' in at) {
     const plate = reader.find('plate', at.plateId)
     const taken = plate?.jacks.find((jack) => jack.id === at.jackId)
-    const free = plate?.jacks.find((jack) => jack.connector === taken?.connector && !runsOn(reader, { plateId: plate.id, jackId: jack.id }).length)
+    const free = onward(plate?.jacks ?? [], taken).find((jack) => jack.connector === taken?.connector && !runsOn(reader, { plateId: at.plateId, jackId: jack.id }).length)
     return free ? { plateId: at.plateId, jackId: free.id } : null
   }
   if (!('deviceId' in at)) return null
   const model = reader.find('deviceModel', reader.find('device', at.deviceId)?.modelId)
   const taken = model?.terminals.find((terminal) => terminal.key === at.terminal)
-  const free = model?.terminals.find((terminal) => terminal.signal === taken?.signal && terminal.direction === taken.direction && !runsOn(reader, { deviceId: at.deviceId, terminal: terminal.key }).length)
+  const free = onward(model?.terminals ?? [], taken).find((terminal) => terminal.signal === taken?.signal && terminal.direction === taken.direction && !runsOn(reader, { deviceId: at.deviceId, terminal: terminal.key }).length)
   return free ? { deviceId: at.deviceId, terminal: free.key } : null
 }
+
+/** Those after this position first, then the ones before it. */
+const onward = <T extends { position: number }>(all: readonly T[], from: T | undefined): T[] =>
+  [...all].sort((a, b) => Number(a.position < (from?.position ?? 0)) - Number(b.position < (from?.position ?? 0)) || a.position - b.position)
 
 export const cordUse = defineCheck({
   id: 'cordUse',

@@ -75,8 +75,8 @@ function betterCable(reader: JobReader, run: Run, type: CableType, lengthMm: num
   return { advice: gauge ? `${gauge.id} AWG would do; no cable of that size is on the job.` : 'No usual gauge would do: move the amplifier nearer, or raise the load.', remedy: null }
 }
 
-/** A stand-in must lie where the other may: in the wet, outside, in the ground, in a plenum or riser. */
-const sameFitness = (a: CableType, b: CableType) => (!b.wet || a.wet) && (!b.outdoor || a.outdoor) && (!b.buried || a.buried) && (!b.jacketRating.endsWith('P') || a.jacketRating.endsWith('P'))
+/** A stand-in is made for the same places: indoors or out, in the ground, in a plenum. */
+const sameFitness = (a: CableType, b: CableType) => a.wet === b.wet && a.outdoor === b.outdoor && a.buried === b.buried && a.jacketRating.endsWith('P') === b.jacketRating.endsWith('P')
 
 function basisOf(reader: JobReader, type: CableType, lengthMm: number, loopOhm: number, loadOhm: number, loss: number): string {
   const { limits } = reader.job()

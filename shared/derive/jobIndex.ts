@@ -1,5 +1,5 @@
 import type { JobDocument } from '../model/jobDocument.ts'
-import { kinds, type JobRecord } from '../model/record.ts'
+import { fieldKinds, kinds, type JobRecord } from '../model/record.ts'
 import type { CordEnd, RunEnd } from '../model/run.ts'
 
 /** Where an end is, as a key: every run or cord there is found under it. */
@@ -86,10 +86,17 @@ export class JobIndex {
     touch(`all ${(after ?? before)!.kind}`)
   }
 
-  /** The records that answer a question, of one kind. */
+  /**
+   * The records that answer a question. What people said comes in the order they said it; everything else in an order
+   * that does not depend on how the job came to be as it is.
+   */
   get<R extends JobRecord>(key: string): R[] {
     const at = this.found.get(key)
-    return at ? ([...at.values()] as R[]) : []
+    if (!at || at.size === 0) return []
+    const records = [...at.values()] as R[]
+    return records.length === 1 || fieldKinds.has(records[0]!.kind) ? records : records.sort(settledOrder)
   }
 }
 
+
+const settledOrder = (a: JobRecord, b: JobRecord): number => (a.kind === 'run' && b.kind === 'run' ? a.serial - b.serial : a.id < b.id ? -1 : 1)
