@@ -1,0 +1,210 @@
+import { bandsOf, reach, type ColumnBands } from './bands.ts'
+import type { Column } from './columns.ts'
+import { metrics } from './metrics.ts'
+import type { HouseRoom, Storey } from './readHouse.ts'
+import type { Exit } from './readTrips.ts'
+import { roomNeed, spreadRoom, type Contents, type RoomNeed } from './roomWidths.ts'
+import type { RunMark } from './riserLayout.ts'
+import type { Strand } from './strands.ts'
+import { seatTags, type TagWish } from './tagRows.ts'
+
+export interface PlacedBay {
+  readonly room: HouseRoom
+  readonly storey: number
+  readonly x0: number
+  readonly x1: number
+}
+
+/** The section from left to right. */
+export interface Placing {
+  readonly bays: readonly PlacedBay[]
+  readonly slots: Map<Exit, number>
+  /** Middle of each fixture. */
+  readonly centres: Map<string, number>
+  /** Middle of each column. */
+  readonly columns: readonly number[]
+  readonly bands: readonly ColumnBands[]
+  /** What a column takes on each storey. */
+  readonly gaps: readonly (readonly { readonly x0: number; readonly x1: number }[])[]
+  /** Edges of the building on each storey. */
+  readonly edges: readonly { readonly x0: number; readonly x1: number }[]
+  readonly folded: readonly boolean[]
+  readonly width: number
+}
+
+interface Wants {
+  readonly storeys: readonly Storey[]
+  readonly columns: readonly Column[]
+  readonly strands: readonly Strand[]
+  readonly contents: Contents
+  readonly mark: (runId: string) => RunMark | undefined
+  readonly crossers: readonly number[]
+  readonly apart: boolean
+  /** Space beside the house for what hangs on its end walls. */
+  readonly leftExtra: number
+  readonly rightExtra: number
+}
+
+interface Row {
+  readonly inside: readonly (readonly RoomNeed[])[]
+  readonly outsideLeft: readonly RoomNeed[]
+  readonly outsideRight: readonly RoomNeed[]
+}
+
+const wall = 6
+const widthOf = (needs: readonly RoomNeed[]) => needs.reduce((sum, need) => sum + need.width, 0)
+
+export function placeRooms(wants: Wants): Placing {
+  const { storeys, columns, strands, apart } = wants
+  const bands = columns.map((column) => bandsOf(column, strands.filter((strand) => strand.column === column.index), wants.crossers[column.index] ?? 0, apart))
+  const reaches = storeys.map((storey) => columns.map((column, index) => reach(column, bands[index]!, strands, storey.index, storey.kind === 'full' && storeys.length > 1)))
+  const loads = storeys.map((storey) => exitsIn(storey, wants.contents))
+  const isLarge = loads.reduce((sum, load) => sum + load, 0) > metrics.largeJob
+  const folded = loads.map((load) => load > (isLarge ? metrics.foldOverInLarge : metrics.foldOver))
+  const rows = storeys.map((storey, index) => (storey.kind === 'full' ? rowOf(storey, wants, bands, folded[index]!) : { inside: columns.map(() => []).concat([[]]), outsideLeft: [], outsideRight: [] }))
+  const outer = outerWidths(storeys, rows, columns)
+  const centres = solveColumns(rows, reaches, outer, columns.length, metrics.margin.left + wants.leftExtra)
+  const placing = { bays: [] as PlacedBay[], slots: new Map<Exit, number>(), centres: new Map<string, number>() }
+  const left = metrics.margin.left + wants.leftExtra
+  const own = rows.map((row, index) => (hasRooms(row) ? placeRow(row, storeys[index]!, { centres, reaches: reaches[index]!, outer: outer[index]!, left }, placing) : null))
+  const edges = own.map((edge, index) => edge ?? nearestEdge(own, index) ?? { x0: left, x1: left + 320 })
+  const width = Math.max(...placing.bays.map((bay) => bay.x1), ...edges.map((edge) => edge.x1 + wants.rightExtra), left + 320) + wall + metrics.margin.right
+  const gaps = reaches.map((row) => row.map((each, index) => ({ x0: centres[index]! - each.left, x1: centres[index]! + each.right })))
+  return { ...placing, columns: centres, bands, gaps, edges, folded, width }
+}
+
+const hasRooms = (row: Row) => row.inside.some((needs) => needs.length > 0)
+
+/** A storey without bays is as wide as the nearest that has some. */
+function nearestEdge(edges: readonly ({ x0: number; x1: number } | null)[], index: number): { x0: number; x1: number } | null {
+  const found = edges.flatMap((edge, at) => (edge ? [{ edge, distance: Math.abs(at - index) }] : []))
+  return found.sort((a, b) => a.distance - b.distance)[0]?.edge ?? null
+}
+
+const exitsIn = (storey: Storey, contents: Contents) => storey.rooms.reduce((sum, room) => sum + room.fixtures.reduce((own, fixture) => own + (contents.exits.get(fixture.key)?.length ?? 0), 0), 0)
+
+/** The rooms of a storey, split at the columns, each with the width it needs. */
+function rowOf(storey: Storey, wants: Wants, bands: readonly ColumnBands[], isDense: boolean): Row {
+  const indoors = storey.rooms.filter((room) => !room.isOutside || room.racks.length)
+  const house = indoors.length ? indoors : storey.rooms
+  const middle = house.reduce((sum, room) => sum + room.centre, 0) / Math.max(1, house.length)
+  const beside = storey.rooms.filter((room) => !house.includes(room))
+  const columnOf = (room: HouseRoom) => wants.columns.find((column) => room.racks.length > 0 && column.racks.some((rack) => rack.rack.roomId === room.room.id))
+  const segmentOf = (room: HouseRoom) => columnOf(room)?.index ?? wants.columns.filter((column) => column.planX <= room.centre).length
+  const need = (room: HouseRoom) => {
+    const column = columnOf(room)
+    return (pitch: number) => roomNeed(room, wants.contents, pitch, isDense, column ? bands[column.index]!.rackWidth : 0)
+  }
+  const segments = Array.from({ length: wants.columns.length + 1 }, (_, index) =>
+    house.filter((room) => segmentOf(room) === index).sort((a, b) => Number(a.racks.length > 0) - Number(b.racks.length > 0) || a.centre - b.centre),
+  )
+  const west = beside.filter((room) => room.centre < middle)
+  const east = beside.filter((room) => room.centre >= middle)
+  const inside = segments.map((rooms, index) => {
+    const all = [...(index === 0 ? west : []), ...rooms, ...(index === wants.columns.length ? east : [])]
+    return fitPitch(all.map(need), wants.mark, isDense)
+  })
+  const of = (rooms: readonly HouseRoom[]) => inside.map((needs) => needs.filter((each) => rooms.includes(each.room)))
+  return { inside: of(house), outsideLeft: of(west).flat(), outsideRight: of(east).flat() }
+}
+
+/** Widens rooms of a stretch, each no more than it must, until all its tags find a seat. */
+function fitPitch(needs: readonly ((pitch: number) => RoomNeed)[], mark: Wants['mark'], isDense: boolean): RoomNeed[] {
+  if (isDense) return needs.map((need) => need(metrics.densePitch))
+  const pitches = needs.map((): number => metrics.slotPitch)
+  for (let tries = 0; ; tries++) {
+    const tried = needs.map((need, index) => need(pitches[index]!))
+    const wishes: (TagWish & { index: number })[] = []
+    let at = 0
+    tried.forEach((need, index) => {
+      const slots = new Map<Exit, number>()
+      spreadRoom(need, at, (at += need.width), slots, new Map())
+      for (const [{ runId }, x] of slots) {
+        const text = mark(runId)
+        if (text) wishes.push({ runId, x, ...text, index })
+      }
+    })
+    const { over } = seatTags(wishes, metrics.tag.rows, { left: 0, right: at + 2 })
+    if (!over.length || tries > 60) return tried
+    const tight = new Set(over.map((wish) => wish.index))
+    for (const index of tight) pitches[index]! *= 1.04
+  }
+}
+
+function solveColumns(rows: readonly Row[], reaches: readonly (readonly { left: number; right: number }[])[], outer: readonly { left: number }[], count: number, margin: number): number[] {
+  const centres: number[] = []
+  for (let index = 0; index < count; index++) {
+    const from = index === 0 ? margin : centres[index - 1]!
+    const needs = rows.map((row, storey) => {
+      const before = index === 0 ? widthOf(row.outsideLeft) + wall : (reaches[storey]![index - 1]?.right ?? 0)
+      return before + Math.max(widthOf(row.inside[index] ?? []), index === 0 ? outer[storey]!.left : 0) + reaches[storey]![index]!.left
+    })
+    centres.push(from + Math.max(0, ...needs))
+  }
+  return centres
+}
+
+/** How wide the outermost stretches are drawn: as the plan has them beside the widest storey, and never under their need. */
+function outerWidths(storeys: readonly Storey[], rows: readonly Row[], columns: readonly Column[]): { left: number; right: number }[] {
+  const last = columns.length
+  const extents = storeys.map((storey) => {
+    const rooms = storey.rooms.filter((room) => !room.isOutside)
+    const min = Math.min(...rooms.map((room) => room.minX))
+    const max = Math.max(...rooms.map((room) => room.maxX))
+    return { left: (columns[0]?.planX ?? min) - min, right: max - (columns[last - 1]?.planX ?? min) }
+  })
+  const side = (end: 'left' | 'right', segment: number) => {
+    const needs = rows.map((row) => widthOf(row.inside[segment] ?? []))
+    const widest = Math.max(...needs)
+    const reference = Math.max(...extents.map((extent, index) => (needs[index] ? extent[end] : 0)))
+    return needs.map((need, index) => {
+      if (!need) return 0
+      const wanted = reference > 0 ? widest * Math.min(1, Math.max(0, extents[index]![end]) / reference) : need
+      const width = Math.max(need, wanted)
+      return widest - width < 30 ? widest : width
+    })
+  }
+  const left = last ? side('left', 0) : storeys.map(() => 0)
+  const right = side('right', last)
+  return storeys.map((_, index) => ({ left: left[index]!, right: right[index]! }))
+}
+
+interface RowSpace {
+  readonly centres: readonly number[]
+  readonly reaches: readonly { left: number; right: number }[]
+  readonly outer: { left: number; right: number }
+  readonly left: number
+}
+
+/** Lays the rooms of a storey out between its columns; returns the edges of the building there. */
+function placeRow(row: Row, storey: Storey, space: RowSpace, placing: { bays: PlacedBay[]; slots: Map<Exit, number>; centres: Map<string, number> }): { x0: number; x1: number } {
+  const { centres, reaches, outer } = space
+  const last = centres.length
+  const lay = (needs: readonly RoomNeed[], from: number, to: number) => {
+    const spare = Math.max(0, to - from - widthOf(needs))
+    const weight = needs.reduce((sum, need) => sum + need.room.maxX - need.room.minX, 0) || 1
+    let at = from
+    for (const need of needs) {
+      const width = need.width + (spare * (need.room.maxX - need.room.minX)) / weight
+      const x1 = at + width + need.rackWidth + (need.rackWidth ? 5 : 0)
+      spreadRoom(need, at, at + width, placing.slots, placing.centres)
+      placing.bays.push({ room: need.room, storey: storey.index, x0: at, x1 })
+      at += width
+    }
+  }
+  let x0 = Infinity
+  let x1 = -Infinity
+  row.inside.forEach((needs, segment) => {
+    const before = segment === 0 ? null : centres[segment - 1]! + Math.max(reaches[segment - 1]!.right, 0)
+    const after = segment === last ? null : centres[segment]! - reaches[segment]!.left
+    const from = before ?? (after === null ? space.left + wall + widthOf(row.outsideLeft) : after - (outer.left || widthOf(needs)))
+    const to = after ?? from + (outer.right || widthOf(needs))
+    lay(needs, from, to)
+    x0 = Math.min(x0, from)
+    x1 = Math.max(x1, to)
+  })
+  const edge = { x0: x0 - wall, x1: x1 + wall }
+  lay(row.outsideLeft, edge.x0 - widthOf(row.outsideLeft), edge.x0)
+  lay(row.outsideRight, edge.x1, edge.x1 + widthOf(row.outsideRight))
+  return edge
+}
