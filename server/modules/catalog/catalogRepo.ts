@@ -3,6 +3,7 @@ import type { CatalogEntry } from '../../../shared/api/catalog.ts'
 import type { CableDescription } from '../../../shared/model/cableType.ts'
 import type { DeviceDescription } from '../../../shared/model/device.ts'
 import type { Session, Tx } from '../../db/client.ts'
+import { exactColumns } from '../../db/exactColumns.ts'
 import { cableDescriptionOf, deviceDescriptionOf } from '../../db/rows/descriptions.ts'
 import { catalogCableTypes as cables, catalogDeviceModels as models } from '../../db/tables/models.ts'
 
@@ -23,8 +24,8 @@ const isCable = (companyId: string, id: string) => and(eq(cables.companyId, comp
 
 export const cableTypeStore: CatalogStore<CableDescription> = {
   word: 'cable type',
-  list: async (db, companyId) => (await db.select().from(cables).where(eq(cables.companyId, companyId)).orderBy(asc(cables.code))).map(cableEntry),
-  lock: async (tx, companyId, id) => (await tx.select().from(cables).where(isCable(companyId, id)).for('update')).map(cableEntry)[0],
+  list: async (db, companyId) => (await db.select(exactColumns(cables)).from(cables).where(eq(cables.companyId, companyId)).orderBy(asc(cables.code))).map(cableEntry),
+  lock: async (tx, companyId, id) => (await tx.select(exactColumns(cables)).from(cables).where(isCable(companyId, id)).for('update')).map(cableEntry)[0],
   insert: async (tx, companyId, entries) => {
     if (entries.length) await tx.insert(cables).values(entries.map(({ id, version, description }) => ({ companyId, id, version, ...description })))
   },
@@ -41,8 +42,8 @@ const isModel = (companyId: string, id: string) => and(eq(models.companyId, comp
 
 export const deviceModelStore: CatalogStore<DeviceDescription> = {
   word: 'device model',
-  list: async (db, companyId) => (await db.select().from(models).where(eq(models.companyId, companyId)).orderBy(asc(models.category), asc(models.name), asc(models.id))).map(modelEntry),
-  lock: async (tx, companyId, id) => (await tx.select().from(models).where(isModel(companyId, id)).for('update')).map(modelEntry)[0],
+  list: async (db, companyId) => (await db.select(exactColumns(models)).from(models).where(eq(models.companyId, companyId)).orderBy(asc(models.category), asc(models.name), asc(models.id))).map(modelEntry),
+  lock: async (tx, companyId, id) => (await tx.select(exactColumns(models)).from(models).where(isModel(companyId, id)).for('update')).map(modelEntry)[0],
   insert: async (tx, companyId, entries) => {
     if (entries.length) await tx.insert(models).values(entries.map(({ id, version, description }) => ({ companyId, id, version, ...description })))
   },

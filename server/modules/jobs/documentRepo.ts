@@ -4,6 +4,7 @@ import { find, type JobDocument, type Records } from '../../../shared/model/jobD
 import { kinds, type JobRecord, type Kind } from '../../../shared/model/record.ts'
 import type { Change } from '../../../shared/sync/change.ts'
 import type { Tx } from '../../db/client.ts'
+import { exactColumns } from '../../db/exactColumns.ts'
 import { jobRowMappers } from '../../db/rows/jobRowMappers.ts'
 import { jobRecordOf, jobRow } from '../../db/rows/jobRows.ts'
 import type { PartMapper, Row, RowMapper } from '../../db/rows/rowMapper.ts'
@@ -37,7 +38,7 @@ export async function loadJob(tx: Tx, scope: JobScope): Promise<JobDocument | un
 async function loadKind(tx: Tx, scope: JobScope, mapper: RowMapper): Promise<ReadonlyMap<string, JobRecord>> {
   const { table, part } = mapper
   const [rows, parts] = await Promise.all([
-    tx.select().from(table as MySqlTable).where(within(scope, table)).orderBy(asc(table.seq)) as Promise<Row[]>,
+    tx.select(exactColumns(table as MySqlTable)).from(table as MySqlTable).where(within(scope, table)).orderBy(asc(table.seq)) as Promise<Row[]>,
     part ? (tx.select().from(part.table as MySqlTable).where(within(scope, part.table)).orderBy(asc(part.owner), asc(part.table.ordinal)) as Promise<Row[]>) : [],
   ])
   const partsOf = new Map<unknown, Row[]>()
