@@ -42,7 +42,7 @@ export interface LabelOrigin {
 
 /** Upper left corner of a label, mm, row and column from 0. Null: a place the sheet does not have, or as above. */
 export function labelOrigin(sheet: LabelSheet, row: number, column: number): LabelOrigin | null {
-  if (!isUsableSheet(sheet) || !Number.isSafeInteger(row) || !Number.isSafeInteger(column)) return null
+  if (sheetClosure(sheet) === null || !Number.isSafeInteger(row) || !Number.isSafeInteger(column)) return null
   if (row < 0 || column < 0 || row >= sheet.rows || column >= sheet.columns) return null
   return {
     xMm: sheet.leftMm + column * (sheet.labelWidthMm + sheet.gapXMm),
@@ -78,6 +78,8 @@ export function labelPlace(sheet: LabelSheet, ordinal: number, settings: PrintSe
   const row = Math.floor(onSheet / sheet.columns)
   const column = onSheet % sheet.columns
   const origin = labelOrigin(sheet, row, column)
-  if (origin === null || !usable(offsetXMm, offsetYMm)) return null
-  return { sheet: Math.floor(place / perSheet), row, column, xMm: origin.xMm + offsetXMm, yMm: origin.yMm + offsetYMm }
+  if (origin === null) return null
+  const xMm = finite(origin.xMm + offsetXMm)
+  const yMm = finite(origin.yMm + offsetYMm)
+  return xMm === null || yMm === null ? null : { sheet: Math.floor(place / perSheet), row, column, xMm, yMm }
 }

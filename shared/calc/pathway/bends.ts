@@ -1,4 +1,4 @@
-import { usable } from '../usable.ts'
+import { finite, usable } from '../usable.ts'
 
 /** Most bends between two pull points, degrees, and the longest pull, mm. */
 export const pullLimits = {
@@ -11,7 +11,7 @@ export const pullLimits = {
 /** Sum of bends, degrees. Null: a bend that is no number or negative. */
 export function bendsTotalDeg(bendsDeg: readonly number[]): number | null {
   if (!usable(...bendsDeg) || bendsDeg.some((bend) => bend < 0)) return null
-  return bendsDeg.reduce((sum, bend) => sum + bend, 0)
+  return finite(bendsDeg.reduce((sum, bend) => sum + bend, 0))
 }
 
 /** Whether a pull stays within 360 degrees of bends. Null as above. Source: NEC 3xx.26. */

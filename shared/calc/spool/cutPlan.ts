@@ -65,6 +65,7 @@ export function cutPlan(ask: CutPlanAsk): CutPlan | null {
   const isLength = (length: number) => Number.isFinite(length) && length > 0
   if (![...runs, ...putUps].every(({ lengthMm }) => isLength(lengthMm))) return null
   if (!onHand.every(({ leftMm }) => Number.isFinite(leftMm) && leftMm >= 0)) return null
+  if (!Number.isFinite([...runs, ...putUps].reduce((sum, { lengthMm }) => sum + lengthMm, 0) * (runs.length + 1))) return null
   if (!Number.isFinite(stubMm) || stubMm < 0 || !(reserve >= 0 && reserve < 1)) return null
 
   const usable = (lengthMm: number) => Math.floor(lengthMm * (1 - reserve)) - stubMm

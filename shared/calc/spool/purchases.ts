@@ -21,6 +21,7 @@ export interface Purchases {
 }
 
 const mostTried = 200
+const mostSteps = 200_000
 
 /**
  * Purchases between what the total length asks for at least and what best fit needs, by bought length and then by
@@ -31,30 +32,36 @@ export function purchases(lengths: readonly number[], heldMm: readonly number[],
   const sureCounts = sold.map((_, kind) => sure.bought.filter((bought) => bought === kind).length)
   const most = boughtOf(sureCounts, sold)
   const missing = lengths.reduce((sum, length) => sum + length, 0) - heldMm.reduce((sum, held) => sum + held, 0)
+  // The longest put-up outside and most of it first, so that few pieces come early; the shortest makes up what is missing.
+  const order = sold.map((_, kind) => kind).sort((a, b) => (sold[b]?.lengthMm ?? 0) - (sold[a]?.lengthMm ?? 0))
   const list: Bought[] = []
-  let isWhole = true
+  const counts = sold.map(() => 0)
+  let steps = 0
 
-  function extend(kind: number, counts: number[], boughtMm: number, usableMm: number) {
-    if (list.length > 50 * mostTried) {
-      isWhole = false
-      return
-    }
+  function extend(depth: number, boughtMm: number, usableMm: number) {
+    const kind = order[depth] ?? -1
     const spool = sold[kind]
     if (spool === undefined) {
       if (usableMm >= missing) list.push({ counts: [...counts], boughtMm })
       return
     }
-    for (let count = 0; boughtMm + count * spool.lengthMm <= most; count++) {
-      extend(kind + 1, [...counts, count], boughtMm + count * spool.lengthMm, usableMm + count * spool.usableMm)
+    const highest = Math.floor((most - boughtMm) / spool.lengthMm)
+    const isLast = depth === order.length - 1
+    const lowest = isLast ? Math.max(0, Math.ceil((missing - usableMm) / spool.usableMm)) : 0
+    for (let count = highest; count >= lowest; count--) {
+      if (++steps > mostSteps) break
+      counts[kind] = count
+      extend(depth + 1, boughtMm + count * spool.lengthMm, usableMm + count * spool.usableMm)
     }
+    counts[kind] = 0
   }
-  extend(0, [], 0, 0)
+  extend(0, 0, 0)
 
   const pieces = ({ counts }: Bought) => counts.reduce((sum, count) => sum + count, 0)
   list.sort((a, b) => a.boughtMm - b.boughtMm || pieces(a) - pieces(b))
   const sureAt = list.findIndex(({ counts }) => counts.every((count, kind) => count === sureCounts[kind]))
   const better = sureAt < 0 ? list : list.slice(0, sureAt)
-  return { list: better.slice(0, mostTried), isWhole: isWhole && better.length <= mostTried, sure: sure.packed }
+  return { list: better.slice(0, mostTried), isWhole: steps <= mostSteps && better.length <= mostTried, sure: sure.packed }
 }
 
 const boughtOf = (counts: readonly number[], sold: readonly SoldSpool[]) =>

@@ -12,9 +12,10 @@ export function gatherSizes(lengths: readonly number[]): SizeStock {
   return { sizes, counts: sizes.map((size) => counts.get(size) ?? 0) }
 }
 
-/** Whether pieces can be cut at all: positive finite lengths, none longer than the spool. */
+/** Whether pieces can be cut at all: lengths above nothing, none longer than the spool, and a total that is a number. */
 export function canBeCut(lengths: readonly number[], capacity: number): boolean {
-  return Number.isFinite(capacity) && capacity > 0 && lengths.every((length) => length > 0 && length <= capacity)
+  if (!Number.isFinite(capacity) || capacity <= 0) return false
+  return lengths.every((length) => length > 0 && length <= capacity) && Number.isFinite(capacity * (lengths.length + 1))
 }
 
 /** Whether a run is longer than what it would be cut from; runs may not be spliced. Null: a value that is no number. */

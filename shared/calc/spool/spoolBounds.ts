@@ -23,7 +23,7 @@ export function fewestSpools(lengths: readonly number[], capacity: number): numb
   if (!canBeCut(lengths, capacity)) return null
   const stock = gatherSizes(lengths)
   let bound = boundL2(stock, capacity)
-  while (!canCountFit(stock, capacity, bound)) bound++
+  while (bound < lengths.length && !canCountFit(stock, capacity, bound)) bound++
   return bound
 }
 
