@@ -20,7 +20,7 @@ const unitWords: readonly (readonly [NamedUnit, RegExp])[] = [
   ['m', /^(m|met(re|er)s?)(?![a-z])/],
 ]
 const numberAtStart = /^(\d+ \d+\/\d+|\d+\/\d+|[\d.,]*\d[\d.,]*)/
-const halves: Record<string, string> = {
+const fractionSigns: Record<string, string> = {
   '½': '1/2', '¼': '1/4', '¾': '3/4', '⅛': '1/8', '⅜': '3/8', '⅝': '5/8', '⅞': '7/8',
 }
 const examples: Record<LengthUnit, string> = {
@@ -61,7 +61,7 @@ const shown = (text: string) => (text.trim().length > 24 ? `${text.trim().slice(
 
 function normalise(text: string): string {
   return text
-    .replace(/[½¼¾⅛⅜⅝⅞]/g, (sign) => ` ${halves[sign] ?? ''}`)
+    .replace(/[½¼¾⅛⅜⅝⅞]/g, (sign) => ` ${fractionSigns[sign] ?? ''}`)
     .replaceAll('\u2044', '/')
     .replace(/''|[\u2033\u201c\u201d\u02ba]/g, '"')
     .replace(/[\u2032\u2018\u2019\u02b9]/g, "'")
@@ -79,7 +79,9 @@ function readParts(text: string, unit: LengthUnit): Part[] {
     const digits = numberAtStart.exec(rest)?.[0]
     if (digits === undefined) throw new NotUnderstood(parts.length === 0 ? '' : `"${shown(rest)}" was not understood.`)
     rest = rest.slice(digits.length).trimStart()
-    const named = unitWords.map(([name, words]) => [name, words.exec(rest)?.[0]] as const).find(([, word]) => word !== undefined)
+    const named = unitWords
+      .map(([name, words]) => [name, words.exec(rest)?.[0]] as const)
+      .find(([, word]) => word !== undefined)
     if (named === undefined && rest !== '') throw new NotUnderstood(`"${shown(rest)}" is not a unit of length.`)
     rest = rest.slice(named?.[1]?.length ?? 0).replace(/^[ ,]*-?\s*/, '')
     const name = named?.[0] ?? null
@@ -108,7 +110,9 @@ function withPoint(digits: string, unit: NamedUnit): string {
       return digits.replace(',', '.')
     }
     if (certain || unit === 'ft' || unit === 'in' || unit === 'mm') return digits.replaceAll(',', '')
-    throw new NotUnderstood(`"${digits}" can be read in two ways: write ${digits.replace(',', '')} or ${digits.replace(',', '.')}.`)
+    throw new NotUnderstood(
+      `"${digits}" can be read in two ways: write ${digits.replace(',', '')} or ${digits.replace(',', '.')}.`,
+    )
   }
   if (/^\d*,\d+$|^\d+,$/.test(digits)) return digits.replace(',', '.')
   throw new NotUnderstood(`"${digits}" is not a number.`)
@@ -119,7 +123,8 @@ function toMm(parts: readonly Part[], unit: LengthUnit): number {
   if (first === undefined || third !== undefined) throw new NotUnderstood('')
   if (second === undefined) return mmOf(first.value, first.unit ?? unit)
   if (first.unit !== 'ft' || (second.unit !== 'in' && second.unit !== null)) throw new NotUnderstood('')
-  if (!Number.isInteger(first.value)) throw new NotUnderstood('Feet with a fraction and inches as well cannot both be meant.')
+  if (!Number.isInteger(first.value))
+    throw new NotUnderstood('Feet with a fraction and inches as well cannot both be meant.')
   if (second.value >= 12) throw new NotUnderstood('There are 12 inches in a foot, so inches after feet stay under 12.')
   return mmOf(first.value * 12 + second.value, 'in')
 }

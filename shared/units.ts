@@ -97,7 +97,9 @@ export function formatNumber(value: number, decimals: number): string {
 
 export type ParsedInt = { ok: true; value: number } | { ok: false; message: string }
 
-/** A whole number of at least one, as typed: "12", " 12 ", "1,000". Anything else is refused with a sentence to show. */
+/**
+ * A whole number of at least one, as typed: "12", " 12 ", "1,000". Anything else is refused with a sentence to show.
+ */
 export function parsePositiveInt(text: string, most: number = Number.MAX_SAFE_INTEGER): ParsedInt {
   const typed = text.trim()
   if (typed === '') return { ok: false, message: 'Type a whole number, such as 12.' }

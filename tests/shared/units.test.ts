@@ -1,8 +1,20 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import {
-  feetToMm, formatConductor, formatLength, formatLengthFigure, formatNumber, inchesToMm, metresPerFoot, metresToMm, mmPerFoot,
-  mmToFeet, mmToInches, mmToMetres, parseLength, parsePositiveInt,
+  feetToMm,
+  formatConductor,
+  formatLength,
+  formatLengthFigure,
+  formatNumber,
+  inchesToMm,
+  metresPerFoot,
+  metresToMm,
+  mmPerFoot,
+  mmToFeet,
+  mmToInches,
+  mmToMetres,
+  parseLength,
+  parsePositiveInt,
 } from '../../shared/units.ts'
 
 const mmOf = (text: string, unit: 'ft' | 'm' = 'ft') => {
@@ -146,10 +158,14 @@ describe('parseLength', () => {
   it('never throws and never gives a fraction of a millimetre', () => {
     const alphabet = [..."0123456789.,/' \"-ftinmc½"]
     fc.assert(
-      fc.property(fc.string({ unit: fc.constantFrom(...alphabet), maxLength: 12 }), fc.constantFrom('ft', 'm'), (text, unit) => {
-        const read = parseLength(text, unit)
-        expect(read.ok ? Number.isSafeInteger(read.mm) && read.mm >= 0 : read.message.length > 20).toBe(true)
-      }),
+      fc.property(
+        fc.string({ unit: fc.constantFrom(...alphabet), maxLength: 12 }),
+        fc.constantFrom('ft', 'm'),
+        (text, unit) => {
+          const read = parseLength(text, unit)
+          expect(read.ok ? Number.isSafeInteger(read.mm) && read.mm >= 0 : read.message.length > 20).toBe(true)
+        },
+      ),
       { numRuns: 2000 },
     )
   })

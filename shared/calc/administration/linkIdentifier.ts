@@ -10,8 +10,8 @@ export interface LinkIdentifier {
 const form = /^(\d{1,2})([A-Z]{1,2})-([A-Z]{1,2})(\d{2,4})$/
 
 /**
- * Reads a horizontal link identifier of the form fs-an, such as 1A-A47: floor and space, panel and port.
- * Null: any other form. Source: TIA-606; a university label standard shows 1A, panel A, port 15; digit counts from memory.
+ * Reads a horizontal link identifier of the form fs-an, such as 1A-A47: floor and space, panel and port. Null: any
+ * other form. Source: TIA-606; a university label standard shows 1A, panel A, port 15; digit counts from memory.
  */
 export function readLinkIdentifier(text: string): LinkIdentifier | null {
   const read = form.exec(text)

@@ -9,7 +9,10 @@ export interface GradeCables {
 
 export type ResidentialGrade = 1 | 2
 
-/** Cables to each location by grade. Source: TIA-570-B, in several pages; -C, -D and -E changed the grades and were not seen. */
+/**
+ * Cables to each location by grade. Source: TIA-570-B, in several pages; -C, -D and -E changed the grades and were not
+ * seen.
+ */
 export const residentialGrades: Record<ResidentialGrade, GradeCables> = {
   1: { twistedPair: 1, coaxial: 1, optionalFibre: 1 },
   2: { twistedPair: 2, coaxial: 2, optionalFibre: 2 },
@@ -19,5 +22,9 @@ export const residentialGrades: Record<ResidentialGrade, GradeCables> = {
 export function cablesForGrade(grade: ResidentialGrade, locations: number): GradeCables | null {
   if (!Number.isSafeInteger(locations) || locations < 0) return null
   const { twistedPair, coaxial, optionalFibre } = residentialGrades[grade]
-  return { twistedPair: twistedPair * locations, coaxial: coaxial * locations, optionalFibre: optionalFibre * locations }
+  return {
+    twistedPair: twistedPair * locations,
+    coaxial: coaxial * locations,
+    optionalFibre: optionalFibre * locations,
+  }
 }

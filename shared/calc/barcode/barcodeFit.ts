@@ -20,11 +20,16 @@ export interface BarcodeFit {
 }
 
 /**
- * The widest whole-dot module with which a symbol and its quiet zones fit a label: 0.254 mm is three dots at 300 dpi, two
- * at 203. Null: it does not fit with the narrowest module (shorten the text, or print a QR code), or a value that is no number.
- * Derived from ISO/IEC 15417.
+ * The widest whole-dot module with which a symbol and its quiet zones fit a label: 0.254 mm is three dots at 300 dpi,
+ * two at 203. Null: it does not fit with the narrowest module (shorten the text, or print a QR code), or a value that
+ * is no number. Derived from ISO/IEC 15417.
  */
-export function fitBarcode({ characters, roomMm, dotsPerInch, leastModuleMm = usualLeastModuleMm }: BarcodeRoom): BarcodeFit | null {
+export function fitBarcode({
+  characters,
+  roomMm,
+  dotsPerInch,
+  leastModuleMm = usualLeastModuleMm,
+}: BarcodeRoom): BarcodeFit | null {
   const modules = code128Modules(characters)
   if (modules === null || !usable(roomMm, dotsPerInch, leastModuleMm) || roomMm <= 0 || dotsPerInch <= 0) return null
   const all = modules + 2 * quietModules

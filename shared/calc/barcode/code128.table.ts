@@ -1,6 +1,6 @@
 /**
- * Widths of bars and spaces, in modules, of the values 0 to 106; 103 to 105 start sets A, B and C, 106 stops.
- * Source: ISO/IEC 15417, equal in five public copies; each sums to 11 (the stop to 13), all differ, bar modules are even.
+ * Widths of bars and spaces, in modules, of the values 0 to 106; 103 to 105 start sets A, B and C, 106 stops. Source:
+ * ISO/IEC 15417, equal in five public copies; each sums to 11 (the stop to 13), all differ, bar modules are even.
  */
 const widths = `
   212222 222122 222221 121223 121322 131222 122213 122312 132212 221213

@@ -19,7 +19,11 @@ interface Way {
 }
 
 const sets: readonly Code128Set[] = ['B', 'A', 'C']
-const startOf: Record<Code128Set, number> = { A: code128Values.startA, B: code128Values.startB, C: code128Values.startC }
+const startOf: Record<Code128Set, number> = {
+  A: code128Values.startA,
+  B: code128Values.startB,
+  C: code128Values.startC,
+}
 const switchTo: Record<Code128Set, number> = { A: code128Values.codeA, B: code128Values.codeB, C: code128Values.codeC }
 
 /** Longest text that is encoded; a label has far less. */

@@ -21,8 +21,9 @@ export function code128WidthMm(characters: number, moduleMm: number): number | n
 }
 
 /**
- * Height of bars for hand scanning, mm: 15 % of the symbol's width or 5 mm, whichever is more. Guidance: ISO/IEC 15417:2007 sets
- * none; an older rule asks 6.35 mm (from memory). Null: a value that is no number, or not above nothing.
+ * Height of bars for hand scanning, mm: 15 % of the symbol's width or 5 mm, whichever is more. Guidance: ISO/IEC
+ * 15417:2007 sets none; an older rule asks 6.35 mm (from memory). Null: a value that is no number, or not above
+ * nothing.
  */
 export function barHeightMm(symbolWidthMm: number): number | null {
   return usable(symbolWidthMm) && symbolWidthMm > 0 ? finite(Math.max(0.15 * symbolWidthMm, 5)) : null

@@ -3,8 +3,8 @@ import { qrCountBits, qrDataCodewords, type QrLevel, type QrMode } from './qr.ta
 export const qrVersions = 40
 
 /**
- * Characters that one QR symbol holds in one mode. A digit costs 3 1/3 bits, a character of 0-9 A-Z space $ % * + - . / :
- * 5 1/2, a byte 8, a kanji 13. Null: a version that is no whole number from 1 to 40. Source beside the table.
+ * Characters that one QR symbol holds in one mode. A digit costs 3 1/3 bits, a character of 0-9 A-Z space $ % * + - .
+ * / : 5 1/2, a byte 8, a kanji 13. Null: a version that is no whole number from 1 to 40. Source beside the table.
  */
 export function qrCapacity(version: number, level: QrLevel, mode: QrMode): number | null {
   const codewords = Number.isSafeInteger(version) ? qrDataCodewords[level][version - 1] : undefined

@@ -7,9 +7,10 @@ export type BundleGauge = (typeof bundleGauges)[number]
 export const bundleColumns = [7, 19, 37, 61, 91, 192] as const
 
 /**
- * Ampacity per conductor, A, all conductors loaded, 30 degrees Celsius, by gauge, cable rating and column; null: none given.
- * Source: NEC 2020 Table 725.144, carried to 722 in NEC 2023; from memory, unverified. Cross-checked against a published note's limits for
- * 45 degrees (24 AWG at 60 C: 37 cables; 23 at 60: 61; 24 at 75: 91; 23 at 75: 192). The 2017 edition differs.
+ * Ampacity per conductor, A, all conductors loaded, 30 degrees Celsius, by gauge, cable rating and column; null: none
+ * given. Source: NEC 2020 Table 725.144, carried to 722 in NEC 2023; from memory, unverified. Cross-checked against a
+ * published note's limits for 45 degrees (24 AWG at 60 C: 37 cables; 23 at 60: 61; 24 at 75: 91; 23 at 75: 192). The
+ * 2017 edition differs.
  */
 export const bundleAmpacityTable: Record<BundleGauge, Record<CableRatingC, readonly (number | null)[]>> = {
   26: {

@@ -8,7 +8,10 @@ export const studRules = {
   nonBearing: { holeShare: 0.6, notchShare: 0.4 },
   /** Between a hole's edge and the stud's. */
   edgeIn: 5 / 8,
-  /** A bearing stud with a hole up to this share passes if it is doubled, at most two in a row. From memory, unverified. */
+  /**
+   * A bearing stud with a hole up to this share passes if it is doubled, at most two in a row. From memory,
+   * unverified.
+   */
   doubledBearingHoleShare: 0.6,
   mostDoubledInARow: 2,
 } as const

@@ -12,7 +12,9 @@ export function largestJoistHoleIn(depthIn: number, member: MemberKind = 'sawn')
   return hole > 0 ? finite(hole) : null
 }
 
-/** Whether a hole keeps 2 in to another hole or a notch, edge to edge, in. Null: a value that is no number or negative. */
+/**
+ * Whether a hole keeps 2 in to another hole or a notch, edge to edge, in. Null: a value that is no number or negative.
+ */
 export function isJoistHoleClear(gapIn: number): boolean | null {
   return usable(gapIn) && gapIn >= 0 ? gapIn >= joistRules.edgeIn : null
 }

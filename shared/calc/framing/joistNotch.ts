@@ -17,7 +17,9 @@ export function largestJoistNotch(depthIn: number, atEnd = false, member: Member
   return depth === null || length === null ? null : { depthIn: depth, lengthIn: length }
 }
 
-/** Whether a notch at this distance along a span lies in its middle third, where none may be. Null: outside the span. */
+/**
+ * Whether a notch at this distance along a span lies in its middle third, where none may be. Null: outside the span.
+ */
 export function isInMiddleThird(alongMm: number, spanMm: number): boolean | null {
   if (!usable(alongMm, spanMm) || spanMm <= 0 || alongMm < 0 || alongMm > spanMm) return null
   return alongMm > spanMm / 3 && alongMm < (2 * spanMm) / 3

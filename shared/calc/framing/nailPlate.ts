@@ -1,6 +1,8 @@
 import { usable } from '../usable.ts'
 
-/** Least distance from a bored hole, or a cable run along framing, to the face that is nailed, in. Source: NEC 300.4. */
+/**
+ * Least distance from a bored hole, or a cable run along framing, to the face that is nailed, in. Source: NEC 300.4.
+ */
 export const nailClearanceIn = 1.25
 
 /** Thickness of the steel plate or sleeve that stands in for the distance, in. Source: NEC 300.4. */
@@ -18,7 +20,9 @@ export function needsNailPlate(depthIn: number, holeIn: number, offCentreIn = 0)
   return edge < 0 ? null : edge < nailClearanceIn - 1e-9
 }
 
-/** Whether a cable that runs along a stud or joist this far from its face needs a plate. Null as above. NEC 300.4(D). */
+/**
+ * Whether a cable that runs along a stud or joist this far from its face needs a plate. Null as above. NEC 300.4(D).
+ */
 export function needsPlateAlong(distanceToFaceIn: number): boolean | null {
   return usable(distanceToFaceIn) && distanceToFaceIn >= 0 ? distanceToFaceIn < nailClearanceIn - 1e-9 : null
 }

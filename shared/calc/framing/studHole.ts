@@ -9,9 +9,9 @@ export interface StudCut {
 }
 
 /**
- * Largest hole in a stud, in: the lesser of 40 % (bearing) or 60 % (not) of its depth and what leaves 5/8 in at each edge.
- * Null: anything but sawn lumber (maker's chart or an engineer), or a depth that leaves no hole.
- * Source: IRC R602.6. Advice; local code and the framing inspector come first.
+ * Largest hole in a stud, in: the lesser of 40 % (bearing) or 60 % (not) of its depth and what leaves 5/8 in at each
+ * edge. Null: anything but sawn lumber (maker's chart or an engineer), or a depth that leaves no hole. Source: IRC
+ * R602.6. Advice; local code and the framing inspector come first.
  */
 export function largestStudHoleIn({ member = 'sawn', depthIn, isBearing }: StudCut): number | null {
   if (member !== 'sawn' || !usable(depthIn) || depthIn <= 0) return null

@@ -1,8 +1,8 @@
 import { type ListedMarking, standsInFor } from './substitution.table.ts'
 
 /**
- * Whether a cable with one listed marking may be used where another is called for: the same marking, or a way through the
- * substitution table. Unmarked cable replaces nothing. Source beside the table; the local code decides.
+ * Whether a cable with one listed marking may be used where another is called for: the same marking, or a way through
+ * the substitution table. Unmarked cable replaces nothing. Source beside the table; the local code decides.
  */
 export function mayReplace(have: ListedMarking | 'none', need: ListedMarking): boolean {
   return have !== 'none' && replacementsOf(need).has(have)

@@ -2,7 +2,9 @@ import type { SpaceClass } from '../../model/place.ts'
 import { usable } from '../usable.ts'
 import { type ListedMarking } from './substitution.table.ts'
 
-/** Who lives in the building: code relaxes the riser rule in a one- or two-family dwelling, not in a multifamily one. */
+/**
+ * Who lives in the building: code relaxes the riser rule in a one- or two-family dwelling, not in a multifamily one.
+ */
 export type Occupancy = 'one or two family' | 'multifamily' | 'other'
 
 export interface CableInSpace {
@@ -31,7 +33,9 @@ export interface SpaceFit {
   reason: SpaceReason
 }
 
-/** An X type in a dwelling is thinner than this, mm (1/4 in). For CATVX 3/8 in is remembered; the stricter stands here. */
+/**
+ * An X type in a dwelling is thinner than this, mm (1/4 in). For CATVX 3/8 in is remembered; the stricter stands here.
+ */
 export const xTypeBelowMm = 6.35
 /** Outside a dwelling an X type may lie exposed this far, mm (10 ft). */
 export const xTypeExposedMm = 3048
@@ -44,11 +48,11 @@ const yes: SpaceFit = { fits: true, reason: 'fits' }
 
 /**
  * Whether a cable's marking suits the space it lies in. Null: a diameter that is no number, or not above nothing.
- * Plenum: a P type, or any listed cable in metal raceway (NEC 300.22, 725.179(A)). Riser: an R or P type; general types in metal
- * raceway or a fireproof shaft, and in a one- or two-family dwelling, which needs no riser marking (800.154).
- * X types: under 1/4 in in such a dwelling; elsewhere in raceway or exposed up to 10 ft (1987 Article 800 summary).
- * Wet, outdoors, underground: the maker's rating (from memory, unverified); no listing is asked for outside the building.
- * Advice: local code and the inspector decide.
+ * Plenum: a P type, or any listed cable in metal raceway (NEC 300.22, 725.179(A)). Riser: an R or P type; general
+ * types in metal raceway or a fireproof shaft, and in a one- or two-family dwelling, which needs no riser marking
+ * (800.154). X types: under 1/4 in in such a dwelling; elsewhere in raceway or exposed up to 10 ft (1987 Article 800
+ * summary). Wet, outdoors, underground: the maker's rating (from memory, unverified); no listing is asked for outside
+ * the building. Advice: local code and the inspector decide.
  */
 export function spaceFit(cable: CableInSpace): SpaceFit | null {
   if (!usable(cable.outerDiameterMm) || cable.outerDiameterMm <= 0) return null

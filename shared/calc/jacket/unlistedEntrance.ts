@@ -13,9 +13,10 @@ export interface UnlistedEntrance {
 }
 
 /**
- * Whether unlisted outside-plant cable may come in so far: not more than 50 ft from the point of entrance, terminated in an
- * enclosure or listed protector, and not in riser or plenum spaces. A primary protector belongs as near the entry as practicable, so
- * the whole 50 ft may not be available. Null: a value that is no number, or negative. Source: NEC 800.48.
+ * Whether unlisted outside-plant cable may come in so far: not more than 50 ft from the point of entrance, terminated
+ * in an enclosure or listed protector, and not in riser or plenum spaces. A primary protector belongs as near the
+ * entry as practicable, so the whole 50 ft may not be available. Null: a value that is no number, or negative. Source:
+ * NEC 800.48.
  */
 export function mayEnterUnlisted({ lengthMm, isTerminated, space }: UnlistedEntrance): boolean | null {
   if (!usable(lengthMm) || lengthMm < 0) return null
@@ -23,9 +24,9 @@ export function mayEnterUnlisted({ lengthMm, isTerminated, space }: UnlistedEntr
 }
 
 /**
- * Length that counts when the cable comes in through a bonded rigid or intermediate metal conduit, mm: the point of entrance moves to
- * the conduit's end. EMT and PVC do not move it. Null: a value that is no number or negative, or a conduit longer than
- * the path. Source: ecmweb.com on NEC 800.2 and 800.48.
+ * Length that counts when the cable comes in through a bonded rigid or intermediate metal conduit, mm: the point of
+ * entrance moves to the conduit's end. EMT and PVC do not move it. Null: a value that is no number or negative, or a
+ * conduit longer than the path. Source: ecmweb.com on NEC 800.2 and 800.48.
  */
 export function entranceLengthMm(pathInsideMm: number, inBondedConduitMm: number): number | null {
   if (!usable(pathInsideMm, inBondedConduitMm) || inBondedConduitMm < 0 || pathInsideMm < inBondedConduitMm) return null

@@ -16,8 +16,9 @@ export interface LabelSheet {
 export type SheetName = 'letter-30' | 'letter-80' | 'a4-65'
 
 /**
- * Common sheets, by paper and count. Source: public data files; each closes on its paper exactly. Variants exist: 80-up with
- * left 0.30 in and pitch 2.05 in; some files give 65-up no gap or a top of 6 mm, which is wrong (13 x 21.2 leaves 10.7).
+ * Common sheets, by paper and count. Source: public data files; each closes on its paper exactly. Variants exist:
+ * 80-up with left 0.30 in and pitch 2.05 in; some files give 65-up no gap or a top of 6 mm, which is wrong (13 x 21.2
+ * leaves 10.7).
  */
 export const labelSheets: Record<SheetName, LabelSheet> = {
   'letter-30': {

@@ -6,7 +6,9 @@ export interface Extent {
   heightMm: number
 }
 
-/** Whether a sheet's numbers can be worked with: whole counts above nothing, sizes above nothing, margins not negative. */
+/**
+ * Whether a sheet's numbers can be worked with: whole counts above nothing, sizes above nothing, margins not negative.
+ */
 function isUsableSheet(sheet: LabelSheet): boolean {
   const { columns, rows, labelWidthMm, labelHeightMm, leftMm, topMm, gapXMm, gapYMm } = sheet
   return (
@@ -17,8 +19,8 @@ function isUsableSheet(sheet: LabelSheet): boolean {
 }
 
 /**
- * Paper that a sheet's labels, gaps and equal margins add up to, mm; a layout is right when that is its paper. Null: a value
- * that is no number, negative, or counts that are no whole numbers. Arithmetic.
+ * Paper that a sheet's labels, gaps and equal margins add up to, mm; a layout is right when that is its paper. Null: a
+ * value that is no number, negative, or counts that are no whole numbers. Arithmetic.
  */
 export function sheetClosure(sheet: LabelSheet): Extent | null {
   if (!isUsableSheet(sheet)) return null
@@ -28,11 +30,16 @@ export function sheetClosure(sheet: LabelSheet): Extent | null {
   return widthMm === null || heightMm === null ? null : { widthMm, heightMm }
 }
 
-/** Whether the labels of a sheet lie on its paper: what stands between a typed-in layout and spoiled stock. Null as above. */
+/**
+ * Whether the labels of a sheet lie on its paper: what stands between a typed-in layout and spoiled stock. Null as
+ * above.
+ */
 export function isOnPaper(sheet: LabelSheet): boolean | null {
   const closure = sheetClosure(sheet)
   if (closure === null || !usable(sheet.widthMm, sheet.heightMm)) return null
-  return closure.widthMm - sheet.leftMm <= sheet.widthMm + 0.05 && closure.heightMm - sheet.topMm <= sheet.heightMm + 0.05
+  return (
+    closure.widthMm - sheet.leftMm <= sheet.widthMm + 0.05 && closure.heightMm - sheet.topMm <= sheet.heightMm + 0.05
+  )
 }
 
 export interface LabelOrigin {
@@ -72,7 +79,14 @@ export interface PrintSettings {
 export function labelPlace(sheet: LabelSheet, ordinal: number, settings: PrintSettings): LabelPlace | null {
   const { startAt, offsetXMm = 0, offsetYMm = 0 } = settings
   const perSheet = sheet.columns * sheet.rows
-  if (!Number.isSafeInteger(ordinal) || ordinal < 0 || !Number.isSafeInteger(startAt) || startAt < 1 || startAt > perSheet) return null
+  if (
+    !Number.isSafeInteger(ordinal) ||
+    ordinal < 0 ||
+    !Number.isSafeInteger(startAt) ||
+    startAt < 1 ||
+    startAt > perSheet
+  )
+    return null
   const place = ordinal + startAt - 1
   const onSheet = place % perSheet
   const row = Math.floor(onSheet / sheet.columns)

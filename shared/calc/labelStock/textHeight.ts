@@ -11,8 +11,8 @@ export const capitalShare = 0.7
 const mmPerPoint = 25.4 / 72
 
 /**
- * Character height to be read at a distance, mm: 2 x distance x tan(angle / 2). Null: a value that is no number, not above
- * nothing, or an angle of 180 degrees and more. Source: NUREG-0700 rev. 3 for 16 minutes (2.8 mm at 0.6 m).
+ * Character height to be read at a distance, mm: 2 x distance x tan(angle / 2). Null: a value that is no number, not
+ * above nothing, or an angle of 180 degrees and more. Source: NUREG-0700 rev. 3 for 16 minutes (2.8 mm at 0.6 m).
  */
 export function characterHeightMm(distanceMm: number, angleArcmin: number): number | null {
   if (!usable(distanceMm, angleArcmin) || distanceMm <= 0 || angleArcmin <= 0 || angleArcmin >= 180 * 60) return null
@@ -26,5 +26,7 @@ export function capitalHeightMm(points: number): number | null {
 
 /** Point size whose capitals are so high, rounded up to half a point. Null as above. */
 export function pointsForCapital(heightMm: number): number | null {
-  return usable(heightMm) && heightMm > 0 ? finite(Math.ceil((2 * heightMm) / (capitalShare * mmPerPoint) - 1e-9) / 2) : null
+  return usable(heightMm) && heightMm > 0
+    ? finite(Math.ceil((2 * heightMm) / (capitalShare * mmPerPoint) - 1e-9) / 2)
+    : null
 }

@@ -9,7 +9,8 @@ export interface LabourLine {
 
 /** Hours of a list of tasks: the sum of quantity x unit. Null: a value that is no number, or negative. Derived. */
 export function labourHours(lines: readonly LabourLine[]): number | null {
-  if (!lines.every(({ quantity, hoursEach }) => usable(quantity, hoursEach) && quantity >= 0 && hoursEach >= 0)) return null
+  if (!lines.every(({ quantity, hoursEach }) => usable(quantity, hoursEach) && quantity >= 0 && hoursEach >= 0))
+    return null
   return finite(lines.reduce((sum, { quantity, hoursEach }) => sum + quantity * hoursEach, 0))
 }
 
@@ -25,7 +26,9 @@ export function hoursByLength(lengthMm: number, hoursPerThousandFeet: number): n
   return finite((lengthMm / 304_800) * hoursPerThousandFeet)
 }
 
-/** Whole days for a crew: ceil(hours / (crew x 8)). Null: no number, negative hours, or a crew that is no whole number. */
+/**
+ * Whole days for a crew: ceil(hours / (crew x 8)). Null: no number, negative hours, or a crew that is no whole number.
+ */
 export function crewDays(hours: number, crew: number, hoursADay: number = workdayHours): number | null {
   if (!usable(hours, hoursADay) || hours < 0 || hoursADay <= 0 || !Number.isSafeInteger(crew) || crew < 1) return null
   return finite(ceilOf(hours / (crew * hoursADay)))

@@ -4,7 +4,10 @@ export interface LabourUnit {
   hours: number
 }
 
-/** Hours for a task, for a company to replace by its own. Common practice, no source, except a box: published 0.10 to 0.17 h. */
+/**
+ * Hours for a task, for a company to replace by its own. Common practice, no source, except a box: published 0.10 to
+ * 0.17 h.
+ */
 export const labourUnits = {
   layoutAndBox: { task: 'layout and box or bracket', per: 'each', hours: 0.15 },
   drillAndPull: { task: 'drill and pull, 4-pair or coax, open framing', per: 'run', hours: 0.45 },
@@ -21,8 +24,8 @@ export const labourUnits = {
 } as const satisfies Record<string, LabourUnit>
 
 /**
- * Factors on hours. Published (residential cost-book page): upper floors 1.25, closed walls up to 4 times. The others are
- * common practice, no source. Above 14 ft a lift comes on top.
+ * Factors on hours. Published (residential cost-book page): upper floors 1.25, closed walls up to 4 times. The others
+ * are common practice, no source. Above 14 ft a lift comes on top.
  */
 export const labourFactors = {
   finishedWallsLeast: 2,

@@ -24,8 +24,9 @@ export function bs2051Channel(layout: Bs2051Layout, name: string): Bs2051Channel
 }
 
 /**
- * Whether a loudspeaker stands within its channel's range of azimuth (positive to the left) and elevation. `slackDeg` widens
- * both for a real room; by the letter it is 0. Null: no such channel in the layout, or a value that is no number.
+ * Whether a loudspeaker stands within its channel's range of azimuth (positive to the left) and elevation. `slackDeg`
+ * widens both for a real room; by the letter it is 0. Null: no such channel in the layout, or a value that is no
+ * number.
  */
 export function isBs2051Position(layout: Bs2051Layout, name: string, place: SeenPlace, slackDeg = 0): boolean | null {
   const channel = bs2051Channel(layout, name)
@@ -33,7 +34,11 @@ export function isBs2051Position(layout: Bs2051Layout, name: string, place: Seen
   if (channel === null || !usable(azimuthDeg, elevationDeg, slackDeg) || slackDeg < 0) return null
   const isElevated = isWithin(elevationDeg, channel.elevationDeg, slackDeg)
   // Azimuth is a circle: 180 and -180 are one direction.
-  return isElevated && [azimuthDeg - 360, azimuthDeg, azimuthDeg + 360].some((turn) => isWithin(turn, channel.azimuthDeg, slackDeg))
+  return (
+    isElevated &&
+    [azimuthDeg - 360, azimuthDeg, azimuthDeg + 360].some((turn) => isWithin(turn, channel.azimuthDeg, slackDeg))
+  )
 }
 
-const isWithin = (value: number, [from, to]: DegreeRange, slack: number) => value >= from - slack - 1e-9 && value <= to + slack + 1e-9
+const isWithin = (value: number, [from, to]: DegreeRange, slack: number) =>
+  value >= from - slack - 1e-9 && value <= to + slack + 1e-9

@@ -20,10 +20,15 @@ export function channelCount(format: string, subwoofersNeedAmplifier = false): C
 }
 
 /**
- * Amplifier channels of a house: the theatres', and two for each stereo zone (a single-point stereo speaker takes two as well).
- * Null: a format that cannot be read, or a count of zones that is no whole number. Common practice, no source.
+ * Amplifier channels of a house: the theatres', and two for each stereo zone (a single-point stereo speaker takes two
+ * as well). Null: a format that cannot be read, or a count of zones that is no whole number. Common practice, no
+ * source.
  */
-export function amplifierChannels(theatres: readonly string[], stereoZones: number, subwoofersNeedAmplifier = false): number | null {
+export function amplifierChannels(
+  theatres: readonly string[],
+  stereoZones: number,
+  subwoofersNeedAmplifier = false,
+): number | null {
   if (!Number.isSafeInteger(stereoZones) || stereoZones < 0) return null
   let total = 2 * stereoZones
   for (const format of theatres) {

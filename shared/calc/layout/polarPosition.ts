@@ -20,7 +20,10 @@ export function polarPosition(distance: number, azimuthDeg: number): PlanPositio
   return x === null || y === null ? null : { x, y }
 }
 
-/** Azimuth of a place seen from the listener, degrees, positive to the left, -180 to 180. Null: no number, or no distance. */
+/**
+ * Azimuth of a place seen from the listener, degrees, positive to the left, -180 to 180. Null: no number, or no
+ * distance.
+ */
 export function azimuthOfDeg(x: number, y: number): number | null {
   return usable(x, y) && (x !== 0 || y !== 0) ? (Math.atan2(-x, y) * 180) / Math.PI + 0 : null
 }

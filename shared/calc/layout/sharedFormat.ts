@@ -10,8 +10,9 @@ export function sharedFormat(sinkMaxima: readonly string[], order: readonly stri
 }
 
 /**
- * The same where each display has its own list, such as colour depths or copy-protection versions: the highest that all accept.
- * Null: no display, or nothing in common, in which case the source must not be shared. Common practice, no source.
+ * The same where each display has its own list, such as colour depths or copy-protection versions: the highest that
+ * all accept. Null: no display, or nothing in common, in which case the source must not be shared. Common practice, no
+ * source.
  */
 export function highestCommon(sinks: readonly (readonly string[])[], order: readonly string[]): string | null {
   if (sinks.length === 0) return null

@@ -12,7 +12,10 @@ export function speakerHeightM(distanceM: number, elevationDeg: number, earM: nu
   return finite(earM + distanceM * Math.tan((elevationDeg * Math.PI) / 180))
 }
 
-/** Elevation of a loudspeaker seen from the ear, degrees: atan((height - ear) / distance). Straight overhead is 90. Null as above. */
+/**
+ * Elevation of a loudspeaker seen from the ear, degrees: atan((height - ear) / distance). Straight overhead is 90.
+ * Null as above.
+ */
 export function speakerElevationDeg(heightM: number, distanceM: number, earM: number = earHeightM): number | null {
   if (!usable(heightM, distanceM, earM) || distanceM < 0 || (distanceM === 0 && heightM === earM)) return null
   return (Math.atan2(heightM - earM, distanceM) * 180) / Math.PI

@@ -14,9 +14,9 @@ export interface MarkContext {
 }
 
 /**
- * What is odd about two length marks, or an empty list. Nothing here forbids the entry: the person at the wall knows more.
- * Above twice the estimate and 15 m more than it, a length is "much longer" (common practice, no source).
- * Null: marks that give no length.
+ * What is odd about two length marks, or an empty list. Nothing here forbids the entry: the person at the wall knows
+ * more. Above twice the estimate and 15 m more than it, a length is "much longer" (common practice, no source). Null:
+ * marks that give no length.
  */
 export function markDoubts(marks: PulledMarks, { leastMm, estimateMm, putUpMm }: MarkContext): MarkDoubt[] | null {
   const pulled = pulledLengthMm(marks)
@@ -25,7 +25,8 @@ export function markDoubts(marks: PulledMarks, { leastMm, estimateMm, putUpMm }:
   const doubts: MarkDoubt[] = []
   if (pulled === 0) doubts.push('same mark')
   if (putUpMm !== null && usable(putUpMm) && pulled > putUpMm + tolerance) doubts.push('longer than the put-up')
-  if (leastMm !== null && usable(leastMm) && pulled > 0 && pulled < leastMm - tolerance) doubts.push('shorter than the way')
+  if (leastMm !== null && usable(leastMm) && pulled > 0 && pulled < leastMm - tolerance)
+    doubts.push('shorter than the way')
   if (estimateMm !== null && usable(estimateMm) && pulled > 2 * estimateMm && pulled > estimateMm + 15_000) {
     doubts.push('much longer than the way')
   }

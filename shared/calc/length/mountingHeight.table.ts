@@ -16,5 +16,8 @@ export const mountingHeights: readonly MountingHeight[] = [
   { item: 'flat display', heightMm: 1600, to: 'centre', source: 'common practice, no source (60 to 66 in)' },
 ]
 
-/** Reach of a seated person, mm: 15 in to 48 in, 44 in over a deep counter. Source: Fair Housing Act guidance, as summarised. */
+/**
+ * Reach of a seated person, mm: 15 in to 48 in, 44 in over a deep counter. Source: Fair Housing Act guidance, as
+ * summarised.
+ */
 export const reachRangeMm = { lowest: 381, highest: 1219, highestOverCounter: 1118 } as const

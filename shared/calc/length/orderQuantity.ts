@@ -11,8 +11,8 @@ export const usualWaste = {
 
 /**
  * Length to order, rounded up to whole steps: ceil(length x (1 + waste) / step) x step. The step is a foot, a metre or
- * what the cable is sold in, in the unit of the length. Null: a value that is no number, negative, or a step of nothing.
- * Source: 5 % waste, residential cost-book page; 5 to 15 % is common practice.
+ * what the cable is sold in, in the unit of the length. Null: a value that is no number, negative, or a step of
+ * nothing. Source: 5 % waste, residential cost-book page; 5 to 15 % is common practice.
  */
 export function orderLengthMm(lengthMm: number, waste: number, stepMm: number): number | null {
   if (!usable(lengthMm, waste, stepMm) || lengthMm < 0 || waste < 0 || stepMm <= 0) return null

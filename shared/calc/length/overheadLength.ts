@@ -15,13 +15,22 @@ export interface OverheadRun {
 }
 
 /**
- * Length of a run over the ceiling, mm: |x| + |y| + (ceiling - box) + (ceiling - head) + 2 overhead + slacks.
- * The way follows the framing, so it is orthogonal: a straight line in plan would be short by up to a factor of 1.41.
- * Null: a value that is no number, a negative height, slack or overhead, or an end above the ceiling.
- * Source: horizontal and vertical straight segments, engineerfix.com wire-estimating page; the model is common practice.
+ * Length of a run over the ceiling, mm: |x| + |y| + (ceiling - box) + (ceiling - head) + 2 overhead + slacks. The way
+ * follows the framing, so it is orthogonal: a straight line in plan would be short by up to a factor of 1.41. Null: a
+ * value that is no number, a negative height, slack or overhead, or an end above the ceiling. Source: horizontal and
+ * vertical straight segments, engineerfix.com wire-estimating page; the model is common practice.
  */
 export function overheadLengthMm(run: OverheadRun): number | null {
-  const { alongXMm, alongYMm, ceilingHeightMm, boxHeightMm, headHeightMm, slackBoxMm, slackHeadMm, overheadMm = 0 } = run
+  const {
+    alongXMm,
+    alongYMm,
+    ceilingHeightMm,
+    boxHeightMm,
+    headHeightMm,
+    slackBoxMm,
+    slackHeadMm,
+    overheadMm = 0,
+  } = run
   const heights = [ceilingHeightMm, boxHeightMm, headHeightMm, slackBoxMm, slackHeadMm, overheadMm]
   if (!usable(alongXMm, alongYMm, ...heights) || heights.some((value) => value < 0)) return null
   const rise = ceilingHeightMm - boxHeightMm

@@ -26,10 +26,27 @@ export interface StoreyRun {
 export function storeyLengthMm(run: StoreyRun): number | null {
   const { alongXMm, alongYMm, lowerCeilingHeightMm, headHeightMm, floorDepthMm, upperBoxHeightMm } = run
   const { slackBoxMm, slackHeadMm, passedWallHeightsMm = [] } = run
-  const parts = [lowerCeilingHeightMm, headHeightMm, floorDepthMm, upperBoxHeightMm, slackBoxMm, slackHeadMm, ...passedWallHeightsMm]
+  const parts = [
+    lowerCeilingHeightMm,
+    headHeightMm,
+    floorDepthMm,
+    upperBoxHeightMm,
+    slackBoxMm,
+    slackHeadMm,
+    ...passedWallHeightsMm,
+  ]
   if (!usable(alongXMm, alongYMm, ...parts) || parts.some((value) => value < 0)) return null
   const rise = lowerCeilingHeightMm - headHeightMm
   if (rise < 0) return null
   const passed = passedWallHeightsMm.reduce((sum, wall) => sum + wall + floorDepthMm, 0)
-  return finite(Math.abs(alongXMm) + Math.abs(alongYMm) + rise + floorDepthMm + upperBoxHeightMm + passed + slackBoxMm + slackHeadMm)
+  return finite(
+    Math.abs(alongXMm) +
+      Math.abs(alongYMm) +
+      rise +
+      floorDepthMm +
+      upperBoxHeightMm +
+      passed +
+      slackBoxMm +
+      slackHeadMm,
+  )
 }

@@ -21,5 +21,13 @@ export function underfloorLengthMm(run: UnderfloorRun): number | null {
   const { alongXMm, alongYMm, boxHeightMm, headHeightMm, floorThicknessMm, slackBoxMm, slackHeadMm } = run
   const parts = [boxHeightMm, headHeightMm, floorThicknessMm, slackBoxMm, slackHeadMm]
   if (!usable(alongXMm, alongYMm, ...parts) || parts.some((value) => value < 0)) return null
-  return finite(Math.abs(alongXMm) + Math.abs(alongYMm) + boxHeightMm + headHeightMm + 2 * floorThicknessMm + slackBoxMm + slackHeadMm)
+  return finite(
+    Math.abs(alongXMm) +
+      Math.abs(alongYMm) +
+      boxHeightMm +
+      headHeightMm +
+      2 * floorThicknessMm +
+      slackBoxMm +
+      slackHeadMm,
+  )
 }

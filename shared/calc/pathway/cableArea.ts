@@ -14,12 +14,17 @@ export function cablesAreaIn2(lots: readonly CableLot[]): number | null {
   const isSound = ({ cables, outerDiameterIn }: CableLot) =>
     Number.isSafeInteger(cables) && cables >= 0 && usable(outerDiameterIn) && outerDiameterIn > 0
   if (!lots.every(isSound)) return null
-  return summedAreaIn2(lots.map(({ cables, outerDiameterIn }) => ({ cables, areaIn2: (Math.PI / 4) * outerDiameterIn ** 2 })))
+  return summedAreaIn2(
+    lots.map(({ cables, outerDiameterIn }) => ({ cables, areaIn2: (Math.PI / 4) * outerDiameterIn ** 2 })),
+  )
 }
 
 /** The same from areas that a table prints, in2: the sum of count x area. Null as above. */
 export function summedAreaIn2(lots: readonly { cables: number; areaIn2: number }[]): number | null {
-  if (!lots.every(({ cables, areaIn2 }) => Number.isSafeInteger(cables) && cables >= 0 && usable(areaIn2) && areaIn2 >= 0)) return null
+  if (
+    !lots.every(({ cables, areaIn2 }) => Number.isSafeInteger(cables) && cables >= 0 && usable(areaIn2) && areaIn2 >= 0)
+  )
+    return null
   return finite(lots.reduce((sum, { cables, areaIn2 }) => sum + cables * areaIn2, 0))
 }
 

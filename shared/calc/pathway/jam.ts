@@ -4,9 +4,9 @@ import { finite, usable } from '../usable.ts'
 export const jamBand = { from: 2.8, to: 3.2 } as const
 
 /**
- * Jam ratio: inside diameter over outer diameter of one cable. Some references multiply the diameter by 1.05 for the oval
- * section of a bend; the NEC note does not. Null: a value that is no number, or not above nothing.
- * Source: NEC Chapter 9 Table 1, informational note.
+ * Jam ratio: inside diameter over outer diameter of one cable. Some references multiply the diameter by 1.05 for the
+ * oval section of a bend; the NEC note does not. Null: a value that is no number, or not above nothing. Source: NEC
+ * Chapter 9 Table 1, informational note.
  */
 export function jamRatio(insideDiameterIn: number, outerDiameterIn: number): number | null {
   if (!usable(insideDiameterIn, outerDiameterIn) || insideDiameterIn <= 0 || outerDiameterIn <= 0) return null

@@ -1,7 +1,9 @@
 import { finite, usable } from '../usable.ts'
 import { type RacewayBore, type RacewayKind, racewayTable, type TradeSize } from './raceway.table.ts'
 
-/** Inside of a raceway by kind and trade size; null where that kind is not made in that size. Source beside the table. */
+/**
+ * Inside of a raceway by kind and trade size; null where that kind is not made in that size. Source beside the table.
+ */
 export function racewayBore(kind: RacewayKind, size: TradeSize): RacewayBore | null {
   return racewayTable[kind].get(size) ?? null
 }

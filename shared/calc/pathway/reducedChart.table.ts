@@ -7,7 +7,10 @@ export const reducedChartDiametersMm = [3.3, 4.6, 5.6, 6.1, 7.4, 7.9, 9.4, 13.5,
  * Cables per conduit as telecom work pulls them, fewer than 40 % fill allows; null where the chart says nothing.
  * Source: MIL-HDBK-1012/3 (navalfacilities.tpub.com 1012_30047); the same figures circulate as the TIA-569 chart.
  */
-export const reducedChart: ReadonlyMap<TradeSize, readonly (number | null)[]> = new Map<TradeSize, readonly (number | null)[]>([
+export const reducedChart: ReadonlyMap<TradeSize, readonly (number | null)[]> = new Map<
+  TradeSize,
+  readonly (number | null)[]
+>([
   ['1/2', [1, 1, 0, 0, 0, 0, 0, 0, 0, 0]],
   ['3/4', [6, 5, 4, 3, 2, 2, 1, 0, 0, 0]],
   ['1', [8, 8, 7, 6, 3, 3, 2, 1, 0, 0]],

@@ -4,7 +4,8 @@ import type { TradeSize } from './raceway.table.ts'
 import { reducedChart, reducedChartDiametersMm } from './reducedChart.table.ts'
 
 /** The chart's column for a diameter, mm: the next one that is at least as thick; -1 when none is. */
-const columnOf = (outerDiameterMm: number) => reducedChartDiametersMm.findIndex((column) => column >= outerDiameterMm - 1e-9)
+const columnOf = (outerDiameterMm: number) =>
+  reducedChartDiametersMm.findIndex((column) => column >= outerDiameterMm - 1e-9)
 
 /**
  * Cables per conduit by the reduced telecom chart; a diameter between two columns takes the thicker. Null: thicker than
@@ -31,7 +32,8 @@ export const straightPerRightAngleMm = 9144
  * which the chart gives nothing: put in a pull box. Source: a public fill chart (speedytemplate.com); a rule of thumb.
  */
 export function countForLongPull(cables: number, lengthMm: number, bendsDeg: readonly number[]): number | null {
-  if (!usable(cables, lengthMm, ...bendsDeg) || cables < 0 || lengthMm < 0 || bendsDeg.some((bend) => bend < 0)) return null
+  if (!usable(cables, lengthMm, ...bendsDeg) || cables < 0 || lengthMm < 0 || bendsDeg.some((bend) => bend < 0))
+    return null
   const turns = bendsDeg.reduce((sum, bend) => sum + bend, 0)
   const worthMm = lengthMm + (turns / 90) * straightPerRightAngleMm
   if (worthMm > 2 * 15_240) return null

@@ -3,7 +3,10 @@ import { type CableLot, cablesAreaIn2, fillPercent } from './cableArea.ts'
 
 export interface Sleeve {
   insideDiameterIn: number
-  /** Fill that the listed firestop system allows, percent, as its drawing says. Null: not a rated assembly, or not known. */
+  /**
+   * Fill that the listed firestop system allows, percent, as its drawing says. Null: not a rated assembly, or not
+   * known.
+   */
   listedFillPercent: number | null
 }
 

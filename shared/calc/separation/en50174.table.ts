@@ -1,4 +1,7 @@
-/** Segregation class of a data cable: d Cat 7 and 7A screened, c screened Cat 5e to 6A, b unscreened, a coaxial and other. */
+/**
+ * Segregation class of a data cable: d Cat 7 and 7A screened, c screened Cat 5e to 6A, b unscreened, a coaxial and
+ * other.
+ */
 export const segregationClasses = ['a', 'b', 'c', 'd'] as const
 export type SegregationClass = (typeof segregationClasses)[number]
 
@@ -6,8 +9,8 @@ export const containments = ['none', 'open metal', 'perforated metal', 'solid me
 export type Containment = (typeof containments)[number]
 
 /**
- * Least separation S, mm, of EN 50174-2 in its 2009 scheme. Source: a Swedish trade handbook, 2017, p. 528, for classes b, c, d;
- * class a from memory, unverified.
+ * Least separation S, mm, of EN 50174-2 in its 2009 scheme. Source: a Swedish trade handbook, 2017, p. 528, for
+ * classes b, c, d; class a from memory, unverified.
  */
 export const separationMm: Record<SegregationClass, Record<Containment, number>> = {
   d: { none: 10, 'open metal': 8, 'perforated metal': 5, 'solid metal': 0 },
@@ -18,8 +21,15 @@ export const separationMm: Record<SegregationClass, Record<Containment, number>>
 
 /** Factor P by the most single-phase 20 A circuits it covers; above the last, 6. Same source. */
 export const circuitFactors: readonly { upTo: number; factor: number }[] = [
-  { upTo: 3, factor: 0.2 }, { upTo: 6, factor: 0.4 }, { upTo: 9, factor: 0.6 }, { upTo: 12, factor: 0.8 }, { upTo: 15, factor: 1 },
-  { upTo: 30, factor: 2 }, { upTo: 45, factor: 3 }, { upTo: 60, factor: 4 }, { upTo: 75, factor: 5 },
+  { upTo: 3, factor: 0.2 },
+  { upTo: 6, factor: 0.4 },
+  { upTo: 9, factor: 0.6 },
+  { upTo: 12, factor: 0.8 },
+  { upTo: 15, factor: 1 },
+  { upTo: 30, factor: 2 },
+  { upTo: 45, factor: 3 },
+  { upTo: 60, factor: 4 },
+  { upTo: 75, factor: 5 },
 ]
 export const circuitFactorAbove = 6
 

@@ -5,11 +5,15 @@ import {
 } from './en50174.table.ts'
 
 /**
- * Separation from power by EN 50174-2 (2009 scheme), mm: A = S x P, by class, containment and count of single-phase 20 A circuits.
- * No circuits, no separation. Null: a count that is no whole number, or negative.
- * Source beside the table. Its handbook prints 400 for class b, ladder, over 75 circuits: a slip, 75 x 6 is 450.
+ * Separation from power by EN 50174-2 (2009 scheme), mm: A = S x P, by class, containment and count of single-phase 20
+ * A circuits. No circuits, no separation. Null: a count that is no whole number, or negative. Source beside the table.
+ * Its handbook prints 400 for class b, ladder, over 75 circuits: a slip, 75 x 6 is 450.
  */
-export function separationEn50174Mm(segregation: SegregationClass, containment: Containment, circuits: number): number | null {
+export function separationEn50174Mm(
+  segregation: SegregationClass,
+  containment: Containment,
+  circuits: number,
+): number | null {
   const factor = circuitFactor(circuits)
   return factor === null ? null : finite(separationMm[segregation][containment] * factor)
 }
@@ -30,7 +34,10 @@ export function equivalentCircuits(phases: 1 | 3, currentA: number): number | nu
   return finite(phases * Math.ceil(currentA / 20))
 }
 
-/** Separation by the 2000 edition, mm, from the screening of power and data and the divider between. Source beside the table. */
+/**
+ * Separation by the 2000 edition, mm, from the screening of power and data and the divider between. Source beside the
+ * table.
+ */
 export function separationEn2000Mm(power: Screening, data: Screening, divider: Divider2000): number {
   return separation2000Mm[power][data][divider]
 }

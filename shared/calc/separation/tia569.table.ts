@@ -1,16 +1,22 @@
 /**
- * Situations of the 1990 table. open-open: unshielded power to an open or non-metal pathway. open-metal: unshielded power to
- * a grounded metal pathway. metal-metal: power in grounded metal conduit to such a pathway.
+ * Situations of the 1990 table. open-open: unshielded power to an open or non-metal pathway. open-metal: unshielded
+ * power to a grounded metal pathway. metal-metal: power in grounded metal conduit to such a pathway.
  */
-export const tia569Conditions = ['open-open', 'open-metal', 'metal-metal', 'transformer or motor', 'fluorescent'] as const
+export const tia569Conditions = [
+  'open-open',
+  'open-metal',
+  'metal-metal',
+  'transformer or motor',
+  'fluorescent',
+] as const
 export type Tia569Condition = (typeof tia569Conditions)[number]
 
 export type LoadBand = 'under2' | 'from2to5' | 'over5'
 
 /**
- * Separation from power under 480 V, in; null where the table gives none. Source: EIA/TIA-569 (1990), from a trade reference page
- * and cablinginstall.com 16465376. Dropped in TIA/EIA-569-A (1998), which defers to the NEC for 120/240 V 20 A circuits
- * (what-when-how.com p. 49). Later editions carry a table by circuit count that was not seen.
+ * Separation from power under 480 V, in; null where the table gives none. Source: EIA/TIA-569 (1990), from a trade
+ * reference page and cablinginstall.com 16465376. Dropped in TIA/EIA-569-A (1998), which defers to the NEC for 120/240
+ * V 20 A circuits (what-when-how.com p. 49). Later editions carry a table by circuit count that was not seen.
  */
 export const tia569Table: Record<Tia569Condition, Record<LoadBand, number | null>> = {
   'open-open': { under2: 5, from2to5: 12, over5: 24 },

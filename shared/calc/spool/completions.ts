@@ -67,7 +67,12 @@ function reachFrom(sizes: readonly number[], counts: readonly number[]): number[
 }
 
 /** Whether nothing that is left over would still fit. */
-function isMaximal(sizes: readonly number[], counts: readonly number[], chosen: readonly (readonly [number, number])[], left: number): boolean {
+function isMaximal(
+  sizes: readonly number[],
+  counts: readonly number[],
+  chosen: readonly (readonly [number, number])[],
+  left: number,
+): boolean {
   for (let place = sizes.length - 1; place >= 0; place--) {
     if ((sizes[place] ?? 0) > left) return true
     const taken = chosen.find(([at]) => at === place)?.[1] ?? 0
@@ -80,11 +85,15 @@ const mostCompared = 400
 
 function undominated(found: Filling[]): Filling[] {
   if (found.length > mostCompared) return found
-  const places = found.map(({ taken }) => taken.flatMap(([place, count]) => Array.from<number>({ length: count }).fill(place)))
+  const places = found.map(({ taken }) =>
+    taken.flatMap(([place, count]) => Array.from<number>({ length: count }).fill(place)),
+  )
   return found.filter((_, one) => !places.some((other, two) => two < one && isBetter(other, places[one] ?? [])))
 }
 
-/** Whether every piece of a worse filling can be swapped for a piece at least as long (a smaller place) of the better. */
+/**
+ * Whether every piece of a worse filling can be swapped for a piece at least as long (a smaller place) of the better.
+ */
 function isBetter(better: readonly number[], worse: readonly number[]): boolean {
   return better.length >= worse.length && worse.every((place, at) => (better[at] ?? Infinity) <= place)
 }

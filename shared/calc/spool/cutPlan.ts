@@ -56,16 +56,18 @@ interface Source {
 }
 
 /**
- * Which runs to cut from which spool, so that the bought length is least and, at the same length, the pieces are fewest. Spools on
- * hand are used first and cost nothing. Purchases are tried from the least that total length allows; each is searched
- * for a packing. Null: a length that is no number or not above nothing, a negative stub, or a reserve outside 0 to 1.
+ * Which runs to cut from which spool, so that the bought length is least and, at the same length, the pieces are
+ * fewest. Spools on hand are used first and cost nothing. Purchases are tried from the least that total length allows;
+ * each is searched for a packing. Null: a length that is no number or not above nothing, a negative stub, or a reserve
+ * outside 0 to 1.
  */
 export function cutPlan(ask: CutPlanAsk): CutPlan | null {
   const { runs, putUps, onHand, stubMm, reserve, effort = 20_000_000 } = ask
   const isLength = (length: number) => Number.isFinite(length) && length > 0
   if (![...runs, ...putUps].every(({ lengthMm }) => isLength(lengthMm))) return null
   if (!onHand.every(({ leftMm }) => Number.isFinite(leftMm) && leftMm >= 0)) return null
-  if (!Number.isFinite([...runs, ...putUps].reduce((sum, { lengthMm }) => sum + lengthMm, 0) * (runs.length + 1))) return null
+  if (!Number.isFinite([...runs, ...putUps].reduce((sum, { lengthMm }) => sum + lengthMm, 0) * (runs.length + 1)))
+    return null
   if (!Number.isFinite(stubMm) || stubMm < 0 || !(reserve >= 0 && reserve < 1)) return null
 
   const usable = (lengthMm: number) => Math.floor(lengthMm * (1 - reserve)) - stubMm
@@ -96,7 +98,8 @@ export function cutPlan(ask: CutPlanAsk): CutPlan | null {
   return { spools, tooLong, boughtMm: boughtOf(spools), isProved }
 }
 
-const boughtOf = (spools: readonly CutSpool[]) => spools.reduce((sum, spool) => sum + (spool.isBought ? spool.lengthMm : 0), 0)
+const boughtOf = (spools: readonly CutSpool[]) =>
+  spools.reduce((sum, spool) => sum + (spool.isBought ? spool.lengthMm : 0), 0)
 
 const boughtSources = (offer: Bought, sold: readonly Source[]): Source[] =>
   sold.flatMap((source, place) => Array.from<Source>({ length: offer.counts[place] ?? 0 }).fill(source))

@@ -5,7 +5,9 @@ import { canBeCut } from './sizeStock.ts'
  * spool. Never more than 11/9 of the fewest, and 6/9 (Dosa 2007). Null: a piece that cannot be cut.
  */
 export function firstFitDecreasing(lengths: readonly number[], capacity: number): number[][] | null {
-  return canBeCut(lengths, capacity) ? fit(lengths, capacity, (rooms, length) => rooms.findIndex((room) => room >= length)) : null
+  return canBeCut(lengths, capacity)
+    ? fit(lengths, capacity, (rooms, length) => rooms.findIndex((room) => room >= length))
+    : null
 }
 
 /** Best-fit decreasing: each piece is cut where least is left over. Null as above. */
@@ -20,7 +22,11 @@ export function bestFitDecreasing(lengths: readonly number[], capacity: number):
   })
 }
 
-function fit(lengths: readonly number[], capacity: number, choose: (rooms: readonly number[], length: number) => number): number[][] {
+function fit(
+  lengths: readonly number[],
+  capacity: number,
+  choose: (rooms: readonly number[], length: number) => number,
+): number[][] {
   const spools: number[][] = []
   const rooms: number[] = []
   for (const length of lengths.toSorted((a, b) => b - a)) {
@@ -32,7 +38,10 @@ function fit(lengths: readonly number[], capacity: number, choose: (rooms: reado
   return spools
 }
 
-/** Most spools that first-fit decreasing takes where `fewest` would do: floor(11/9 n + 6/9). Null: no whole number. Dosa 2007. */
+/**
+ * Most spools that first-fit decreasing takes where `fewest` would do: floor(11/9 n + 6/9). Null: no whole number.
+ * Dosa 2007.
+ */
 export function firstFitGuarantee(fewest: number): number | null {
   return Number.isSafeInteger(fewest) && fewest >= 0 ? Math.floor((11 * fewest + 6) / 9) : null
 }

@@ -1,8 +1,8 @@
 import type { PackedSpool } from './packSpools.ts'
 
 /**
- * Best-fit decreasing into given spools: each piece, from the longest, goes where least is left over. Null: that way they do
- * not fit, which proves nothing.
+ * Best-fit decreasing into given spools: each piece, from the longest, goes where least is left over. Null: that way
+ * they do not fit, which proves nothing.
  */
 export function fitGiven(lengths: readonly number[], capacities: readonly number[]): PackedSpool[] | null {
   const spools = capacities.map((capacity) => ({ capacity, left: capacity, lengths: [] as number[] }))
@@ -13,5 +13,7 @@ export function fitGiven(lengths: readonly number[], capacities: readonly number
     best.lengths.push(length)
     best.left -= length
   }
-  return spools.filter((spool) => spool.lengths.length > 0).map(({ capacity, lengths: own }) => ({ capacity, lengths: own }))
+  return spools
+    .filter((spool) => spool.lengths.length > 0)
+    .map(({ capacity, lengths: own }) => ({ capacity, lengths: own }))
 }

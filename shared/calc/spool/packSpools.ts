@@ -19,8 +19,9 @@ const stepsPerState = 40
 
 /**
  * Whether pieces fit into given spools, and how. Search by bin completion (Korf 2002): the longest piece left goes
- * into each kind of spool in turn, with every undominated filling that wastes no more than may still be wasted; states that failed
- * are remembered. `effort` is the number of steps after which it gives up; ten million are about half a second.
+ * into each kind of spool in turn, with every undominated filling that wastes no more than may still be wasted; states
+ * that failed are remembered. `effort` is the number of steps after which it gives up; ten million are about half a
+ * second.
  */
 export function packSpools(lengths: readonly number[], capacities: readonly number[], effort: number): Packing {
   const { sizes, counts: all } = gatherSizes(lengths)
@@ -78,7 +79,11 @@ export function packSpools(lengths: readonly number[], capacities: readonly numb
       counts[first] = (counts[first] ?? 0) - 1
       spools[kind] = (spools[kind] ?? 0) - 1
       const room = capacity - size
-      const { fillings, isCut, steps: taken } = completions({ sizes, counts, room, least: room - waste, most: mostFillings, steps: mostSteps })
+      const {
+        fillings,
+        isCut,
+        steps: taken,
+      } = completions({ sizes, counts, room, least: room - waste, most: mostFillings, steps: mostSteps })
       steps += taken + fillings.length ** 2 / 4
       if (isCut) isCertain = false
       const within = fillings.slice(0, deviations + 1)

@@ -27,12 +27,16 @@ const mostSteps = 200_000
  * Purchases between what the total length asks for at least and what best fit needs, by bought length and then by
  * pieces. Runs must each fit some spool on hand or sold. Derived.
  */
-export function purchases(lengths: readonly number[], heldMm: readonly number[], sold: readonly SoldSpool[]): Purchases {
+export function purchases(
+  lengths: readonly number[],
+  heldMm: readonly number[],
+  sold: readonly SoldSpool[],
+): Purchases {
   const sure = surePlan(lengths, heldMm, sold)
   const sureCounts = sold.map((_, kind) => sure.bought.filter((bought) => bought === kind).length)
   const most = boughtOf(sureCounts, sold)
   const missing = lengths.reduce((sum, length) => sum + length, 0) - heldMm.reduce((sum, held) => sum + held, 0)
-  // The longest put-up outside and most of it first, so that few pieces come early; the shortest makes up what is missing.
+  // The longest put-up outside and most of it first, so that few pieces come early; the shortest makes up the rest.
   const order = sold.map((_, kind) => kind).sort((a, b) => (sold[b]?.lengthMm ?? 0) - (sold[a]?.lengthMm ?? 0))
   const list: Bought[] = []
   const counts = sold.map(() => 0)
@@ -61,24 +65,41 @@ export function purchases(lengths: readonly number[], heldMm: readonly number[],
   list.sort((a, b) => a.boughtMm - b.boughtMm || pieces(a) - pieces(b))
   const sureAt = list.findIndex(({ counts }) => counts.every((count, kind) => count === sureCounts[kind]))
   const better = sureAt < 0 ? list : list.slice(0, sureAt)
-  return { list: better.slice(0, mostTried), isWhole: steps <= mostSteps && better.length <= mostTried, sure: sure.packed }
+  return {
+    list: better.slice(0, mostTried),
+    isWhole: steps <= mostSteps && better.length <= mostTried,
+    sure: sure.packed,
+  }
 }
 
 const boughtOf = (counts: readonly number[], sold: readonly SoldSpool[]) =>
   counts.reduce((sum, count, kind) => sum + count * (sold[kind]?.lengthMm ?? 0), 0)
 
-/** Best fit, once with each put-up as the one that is opened; the least bought length wins, each spool then as short as serves. */
+/**
+ * Best fit, once with each put-up as the one that is opened; the least bought length wins, each spool then as short as
+ * serves.
+ */
 function surePlan(lengths: readonly number[], heldMm: readonly number[], sold: readonly SoldSpool[]) {
-  const plans = (sold.length === 0 ? [0] : sold.map((_, kind) => kind)).map((kind) => planWith(kind, lengths, heldMm, sold))
+  const plans = (sold.length === 0 ? [0] : sold.map((_, kind) => kind)).map((kind) =>
+    planWith(kind, lengths, heldMm, sold),
+  )
   return plans.reduce((best, plan) => {
     const longer = plan.boughtMm - best.boughtMm
     return longer < 0 || (longer === 0 && plan.bought.length < best.bought.length) ? plan : best
   })
 }
 
-function planWith(preferred: number, lengths: readonly number[], heldMm: readonly number[], sold: readonly SoldSpool[]) {
+function planWith(
+  preferred: number,
+  lengths: readonly number[],
+  heldMm: readonly number[],
+  sold: readonly SoldSpool[],
+) {
   const spools: { capacity: number; left: number; lengths: number[]; kind: number | null }[] = heldMm.map((held) => ({
-    capacity: held, left: held, lengths: [], kind: null,
+    capacity: held,
+    left: held,
+    lengths: [],
+    kind: null,
   }))
   for (const length of lengths.toSorted((a, b) => b - a)) {
     let target = spools.filter(({ left }) => left >= length).sort((a, b) => a.left - b.left)[0]

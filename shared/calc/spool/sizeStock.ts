@@ -12,7 +12,9 @@ export function gatherSizes(lengths: readonly number[]): SizeStock {
   return { sizes, counts: sizes.map((size) => counts.get(size) ?? 0) }
 }
 
-/** Whether pieces can be cut at all: lengths above nothing, none longer than the spool, and a total that is a number. */
+/**
+ * Whether pieces can be cut at all: lengths above nothing, none longer than the spool, and a total that is a number.
+ */
 export function canBeCut(lengths: readonly number[], capacity: number): boolean {
   if (!Number.isFinite(capacity) || capacity <= 0) return false
   return lengths.every((length) => length > 0 && length <= capacity) && Number.isFinite(capacity * (lengths.length + 1))
@@ -20,5 +22,7 @@ export function canBeCut(lengths: readonly number[], capacity: number): boolean 
 
 /** Whether a run is longer than what it would be cut from; runs may not be spliced. Null: a value that is no number. */
 export function isTooLong(lengthMm: number, putUpMm: number): boolean | null {
-  return Number.isFinite(lengthMm) && Number.isFinite(putUpMm) && lengthMm >= 0 && putUpMm >= 0 ? lengthMm > putUpMm : null
+  return Number.isFinite(lengthMm) && Number.isFinite(putUpMm) && lengthMm >= 0 && putUpMm >= 0
+    ? lengthMm > putUpMm
+    : null
 }

@@ -2,8 +2,8 @@ import { ceilOf } from '../roundUp.ts'
 import { canBeCut, gatherSizes, type SizeStock } from './sizeStock.ts'
 
 /**
- * Fewest spools by total length: L1 = ceil(sum / capacity). Null: a piece that is no number, not above nothing, or longer
- * than the spool. Source: Martello and Toth, Knapsack Problems (1990), ch. 8.
+ * Fewest spools by total length: L1 = ceil(sum / capacity). Null: a piece that is no number, not above nothing, or
+ * longer than the spool. Source: Martello and Toth, Knapsack Problems (1990), ch. 8.
  */
 export function spoolsByTotal(lengths: readonly number[], capacity: number): number | null {
   if (!canBeCut(lengths, capacity)) return null
@@ -11,8 +11,9 @@ export function spoolsByTotal(lengths: readonly number[], capacity: number): num
 }
 
 /**
- * Fewest spools by Martello and Toth's L2: for each K up to half a spool, pieces over capacity - K lie alone, those over half share with none
- * of their kind, and what is at least K must find room beside them. Never less than L1. Null as above. Source as above.
+ * Fewest spools by Martello and Toth's L2: for each K up to half a spool, pieces over capacity - K lie alone, those
+ * over half share with none of their kind, and what is at least K must find room beside them. Never less than L1. Null
+ * as above. Source as above.
  */
 export function spoolsByMartelloToth(lengths: readonly number[], capacity: number): number | null {
   return canBeCut(lengths, capacity) ? boundL2(gatherSizes(lengths), capacity) : null

@@ -2,8 +2,9 @@ import { ceilOf } from '../roundUp.ts'
 import { finite, usable } from '../usable.ts'
 
 /**
- * Longest span between non-continuous supports, mm (5 ft). Source: TIA-569-C 9.7 extract; Santa Ana city specification.
- * Practice is 4 to 5 ft, uneven, and within 12 to 18 in of conduit and tray ends; never on ceiling tile, grid or its wires.
+ * Longest span between non-continuous supports, mm (5 ft). Source: TIA-569-C 9.7 extract; Santa Ana city
+ * specification. Practice is 4 to 5 ft, uneven, and within 12 to 18 in of conduit and tray ends; never on ceiling
+ * tile, grid or its wires.
  */
 export const longestSpanMm = 1524
 

@@ -28,7 +28,8 @@ const gradeOf = (i: Inputs) => ([1, 2] as const).find((grade: ResidentialGrade) 
 
 export const administrationAnswers: Answers = {
   link_id: (i) => isLinkIdentifier(text(i, 'id')),
-  admin_class: (i) => administrationClass({ telecomSpaces: num(i, 'rooms'), buildings: num(i, 'buildings'), sites: num(i, 'sites') }),
+  admin_class: (i) =>
+    administrationClass({ telecomSpaces: num(i, 'rooms'), buildings: num(i, 'buildings'), sites: num(i, 'sites') }),
   field_colour: (i) => {
     const field = byWords(text(i, 'field'), fields)
     return field && fieldColours[field]

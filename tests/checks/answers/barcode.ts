@@ -7,13 +7,26 @@ import { qrSide, qrSideMm } from '../../../shared/calc/barcode/qrSize.ts'
 import { labelOrigin, sheetClosure } from '../../../shared/calc/labelStock/sheetGeometry.ts'
 import type { LabelSheet } from '../../../shared/calc/labelStock/sheet.table.ts'
 import { capitalHeightMm, characterHeightMm } from '../../../shared/calc/labelStock/textHeight.ts'
-import { circumferenceMm, wrapLargestDiameterMm, wrapLeastLengthMm, wrapUsualLengthMm } from '../../../shared/calc/labelStock/wrapLabel.ts'
+import {
+  circumferenceMm,
+  wrapLargestDiameterMm,
+  wrapLeastLengthMm,
+  wrapUsualLengthMm,
+} from '../../../shared/calc/labelStock/wrapLabel.ts'
 import { type Answers, type Inputs, num, nums, oneOf, text } from './readInputs.ts'
 
 const level = (i: Inputs) => oneOf(text(i, 'level'), qrLevels)
 const sheet = (i: Inputs): LabelSheet => ({
-  widthMm: num(i, 'sheet_w'), heightMm: num(i, 'sheet_h'), columns: num(i, 'cols'), rows: num(i, 'rows'), labelWidthMm: num(i, 'w'),
-  labelHeightMm: num(i, 'h'), leftMm: num(i, 'left'), topMm: num(i, 'top'), gapXMm: num(i, 'gapx'), gapYMm: num(i, 'gapy'),
+  widthMm: num(i, 'sheet_w'),
+  heightMm: num(i, 'sheet_h'),
+  columns: num(i, 'cols'),
+  rows: num(i, 'rows'),
+  labelWidthMm: num(i, 'w'),
+  labelHeightMm: num(i, 'h'),
+  leftMm: num(i, 'left'),
+  topMm: num(i, 'top'),
+  gapXMm: num(i, 'gapx'),
+  gapYMm: num(i, 'gapy'),
 })
 
 export const barcodeAnswers: Answers = {

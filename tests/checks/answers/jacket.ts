@@ -8,17 +8,25 @@ import { type Answers, feet, inches, inFeet, num, oneOf, text } from './readInpu
 
 export const jacketAnswers: Answers = {
   substitute: (i) => {
-    const [have, need] = [oneOf(text(i, 'have'), [...listedMarkings, 'none'] as const), oneOf(text(i, 'need'), listedMarkings)]
+    const [have, need] = [
+      oneOf(text(i, 'have'), [...listedMarkings, 'none'] as const),
+      oneOf(text(i, 'need'), listedMarkings),
+    ]
     return have && need && mayReplace(have, need)
   },
   space_ok: (i) => {
-    const [marking, space] = [oneOf(text(i, 'cable'), [...listedMarkings, 'none'] as const), oneOf(text(i, 'space'), spaceClasses)]
+    const [marking, space] = [
+      oneOf(text(i, 'cable'), [...listedMarkings, 'none'] as const),
+      oneOf(text(i, 'space'), spaceClasses),
+    ]
     const occupancy = i['one_two_family'] === true ? 'one or two family' : 'other'
     return marking && space && spaceFit({ marking, space, occupancy, outerDiameterMm: inches(num(i, 'od')) })?.fits
   },
   unlisted50: (i) => {
     const space = oneOf(text(i, 'space'), spaceClasses)
-    return space && mayEnterUnlisted({ lengthMm: feet(num(i, 'length_ft')), isTerminated: i['terminated'] === true, space })
+    return (
+      space && mayEnterUnlisted({ lengthMm: feet(num(i, 'length_ft')), isTerminated: i['terminated'] === true, space })
+    )
   },
   entrance_shift: (i) => inFeet(entranceLengthMm(feet(num(i, 'path_inside')), feet(num(i, 'in_bonded_rmc')))),
   dwelling_joist: (i) => mayCrossReturnAir(text(i, 'direction') === 'along' ? 'along' : 'across'),

@@ -1,6 +1,11 @@
 import { bs2051Count, isBs2051Position } from '../../../shared/calc/layout/bs2051.ts'
 import { bs2051Channels, type Bs2051Layout, bs2051Systems } from '../../../shared/calc/layout/bs2051.table.ts'
-import { type Bs775Channel, bs775Positions, isBs775Azimuth, pictureAngleDeg } from '../../../shared/calc/layout/bs775.ts'
+import {
+  type Bs775Channel,
+  bs775Positions,
+  isBs775Azimuth,
+  pictureAngleDeg,
+} from '../../../shared/calc/layout/bs775.ts'
 import { amplifierChannels, channelCount } from '../../../shared/calc/layout/channelCount.ts'
 import { polarPosition } from '../../../shared/calc/layout/polarPosition.ts'
 import { sharedFormat } from '../../../shared/calc/layout/sharedFormat.ts'
@@ -32,7 +37,9 @@ export const layoutAnswers: Answers = {
   },
   bs2051_ok: (i) => {
     const layout = layoutOf(i)
-    return layout && isBs2051Position(layout, text(i, 'channel'), { azimuthDeg: num(i, 'az'), elevationDeg: num(i, 'el') })
+    return (
+      layout && isBs2051Position(layout, text(i, 'channel'), { azimuthDeg: num(i, 'az'), elevationDeg: num(i, 'el') })
+    )
   },
   fmt_count: (i) => {
     const count = channelCount(text(i, 'format'))

@@ -26,10 +26,13 @@ export const texts = (inputs: Inputs, name: string): string[] => list(inputs, na
 
 /** Pairs of numbers, such as [count, size]. */
 export const pairs = (inputs: Inputs, name: string): [number, number][] =>
-  list(inputs, name).map((pair) => (Array.isArray(pair) ? [Number(pair[0]), Number(pair[1])] : [Number.NaN, Number.NaN]))
+  list(inputs, name).map((pair) =>
+    Array.isArray(pair) ? [Number(pair[0]), Number(pair[1])] : [Number.NaN, Number.NaN],
+  )
 
 /** A name of the file's among the product's own; undefined where there is none. */
-export const oneOf = <T extends string>(value: string, names: readonly T[]): T | undefined => names.find((name) => name === value)
+export const oneOf = <T extends string>(value: string, names: readonly T[]): T | undefined =>
+  names.find((name) => name === value)
 
 /** The first entry whose pattern a name of the file's matches: the file's words for the product's. */
 export const byWords = <T>(value: string, words: readonly (readonly [RegExp, T])[]): T | undefined =>

@@ -1,5 +1,10 @@
 import { separationEn2000Mm, separationEn50174Mm } from '../../../shared/calc/separation/en50174.ts'
-import { containments, type Divider2000, type Screening, segregationClasses } from '../../../shared/calc/separation/en50174.table.ts'
+import {
+  containments,
+  type Divider2000,
+  type Screening,
+  segregationClasses,
+} from '../../../shared/calc/separation/en50174.table.ts'
 import { isClearOfPower, type PowerWiring } from '../../../shared/calc/separation/necSeparation.ts'
 import { type EnclosureDivider, mayShareEnclosure } from '../../../shared/calc/separation/sharedEnclosure.ts'
 import { separationTia569In } from '../../../shared/calc/separation/tia569.ts'
@@ -26,7 +31,11 @@ const dividers: readonly (readonly [RegExp, EnclosureDivider])[] = [
   [/listed|divider/i, 'listed divider'],
   [/barrier|permanent/i, 'permanent barrier'],
 ]
-const dividers2000: readonly (readonly [RegExp, Divider2000])[] = [[/none|without/i, 'none'], [/alu/i, 'aluminium'], [/steel/i, 'steel']]
+const dividers2000: readonly (readonly [RegExp, Divider2000])[] = [
+  [/none|without/i, 'none'],
+  [/alu/i, 'aluminium'],
+  [/steel/i, 'steel'],
+]
 const screenings: readonly (readonly [RegExp, Screening])[] = [[/^u/i, 'unscreened'], [/^s/i, 'screened']]
 
 export const separationAnswers: Answers = {
@@ -46,7 +55,9 @@ export const separationAnswers: Answers = {
   },
   nec2in: (i) => {
     const power = byWords(text(i, 'power'), wirings)
-    return power && isClearOfPower({ power, gapMm: inches(num(i, 'gap_in')), hasNonconductor: i['nonconductor'] === true })
+    return (
+      power && isClearOfPower({ power, gapMm: inches(num(i, 'gap_in')), hasNonconductor: i['nonconductor'] === true })
+    )
   },
   same_box: (i) => {
     const divider = byWords(text(i, 'barrier'), dividers)

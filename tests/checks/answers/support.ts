@@ -1,9 +1,20 @@
-import { ambientFactor, bundleAmpacityA, halfLoadedAmpacityA, isBundleExempt, largestBundle } from '../../../shared/calc/bundle/bundleAmpacity.ts'
+import {
+  ambientFactor,
+  bundleAmpacityA,
+  halfLoadedAmpacityA,
+  isBundleExempt,
+  largestBundle,
+} from '../../../shared/calc/bundle/bundleAmpacity.ts'
 import { bundleGauges, cableRatingsC } from '../../../shared/calc/bundle/bundleAmpacity.table.ts'
 import { bendRadiusMm, type BentCable, fibreCordRadiusMm } from '../../../shared/calc/support/bendRadius.ts'
 import { newtonsOfPoundsForce } from '../../../shared/calc/support/poundsForce.ts'
 import { pullTensions } from '../../../shared/calc/support/pullTension.table.ts'
-import { hookCapacity, isSpanShortEnough, longestSpanMm, supportsBetween } from '../../../shared/calc/support/supports.ts'
+import {
+  hookCapacity,
+  isSpanShortEnough,
+  longestSpanMm,
+  supportsBetween,
+} from '../../../shared/calc/support/supports.ts'
 import { type Answers, byWords, feet, type Inputs, num, text } from './readInputs.ts'
 
 const bent: readonly (readonly [RegExp, BentCable])[] = [

@@ -10,7 +10,13 @@ import { code128Pattern } from '../../../shared/calc/barcode/code128Pattern.ts'
 import { barHeightMm, code128Modules, code128WidthMm } from '../../../shared/calc/barcode/code128Size.ts'
 import { qrCapacity, qrVersionFor } from '../../../shared/calc/barcode/qrCapacity.ts'
 import { qrModuleFitMm, qrSide, qrSideMm } from '../../../shared/calc/barcode/qrSize.ts'
-import { ambientFactor, bundleAmpacityA, halfLoadedAmpacityA, isBundleExempt, largestBundle } from '../../../shared/calc/bundle/bundleAmpacity.ts'
+import {
+  ambientFactor,
+  bundleAmpacityA,
+  halfLoadedAmpacityA,
+  isBundleExempt,
+  largestBundle,
+} from '../../../shared/calc/bundle/bundleAmpacity.ts'
 import { isJoistHoleClear, largestJoistHoleIn } from '../../../shared/calc/framing/joistHole.ts'
 import { isInMiddleThird, largestJoistNotch } from '../../../shared/calc/framing/joistNotch.ts'
 import { needsNailPlate, needsPlateAlong } from '../../../shared/calc/framing/nailPlate.ts'
@@ -19,14 +25,31 @@ import { spaceFit } from '../../../shared/calc/jacket/spaceFit.ts'
 import { entranceLengthMm, mayEnterUnlisted } from '../../../shared/calc/jacket/unlistedEntrance.ts'
 import { labelOrigin, labelPlace, sheetClosure } from '../../../shared/calc/labelStock/sheetGeometry.ts'
 import { capitalHeightMm, characterHeightMm, pointsForCapital } from '../../../shared/calc/labelStock/textHeight.ts'
-import { circumferenceMm, readablePrintMm, wrapLargestDiameterMm, wrapLeastLengthMm, wrapUsualLengthMm } from '../../../shared/calc/labelStock/wrapLabel.ts'
+import {
+  circumferenceMm,
+  readablePrintMm,
+  wrapLargestDiameterMm,
+  wrapLeastLengthMm,
+  wrapUsualLengthMm,
+} from '../../../shared/calc/labelStock/wrapLabel.ts'
 import { crewDays, factoredHours, hoursByLength, labourHours } from '../../../shared/calc/labour/labourHours.ts'
 import { isBs2051Position } from '../../../shared/calc/layout/bs2051.ts'
-import { isBs775Azimuth, isBs775Height, pictureAngleDeg, surroundAzimuthsDeg } from '../../../shared/calc/layout/bs775.ts'
+import {
+  isBs775Azimuth,
+  isBs775Height,
+  pictureAngleDeg,
+  surroundAzimuthsDeg,
+} from '../../../shared/calc/layout/bs775.ts'
 import { amplifierChannels } from '../../../shared/calc/layout/channelCount.ts'
 import { azimuthOfDeg, polarPosition } from '../../../shared/calc/layout/polarPosition.ts'
 import { speakerElevationDeg, speakerHeightM } from '../../../shared/calc/layout/speakerHeight.ts'
-import { isTopWithin, pictureWidth, topAngleDeg, viewingAngleDeg, viewingDistance } from '../../../shared/calc/layout/viewingDistance.ts'
+import {
+  isTopWithin,
+  pictureWidth,
+  topAngleDeg,
+  viewingAngleDeg,
+  viewingDistance,
+} from '../../../shared/calc/layout/viewingDistance.ts'
 import { averagedTotalMm } from '../../../shared/calc/length/averageLength.ts'
 import { boxesByRuns, boxesByTotal } from '../../../shared/calc/length/boxCount.ts'
 import { framingDetour } from '../../../shared/calc/length/framingDetour.ts'
@@ -54,7 +77,11 @@ import { circuitFactor, equivalentCircuits, separationEn50174Mm } from '../../..
 import { isClearOfPower } from '../../../shared/calc/separation/necSeparation.ts'
 import { separationTia569In } from '../../../shared/calc/separation/tia569.ts'
 import { cutPlan } from '../../../shared/calc/spool/cutPlan.ts'
-import { bestFitDecreasing, firstFitDecreasing, firstFitGuarantee } from '../../../shared/calc/spool/firstFitDecreasing.ts'
+import {
+  bestFitDecreasing,
+  firstFitDecreasing,
+  firstFitGuarantee,
+} from '../../../shared/calc/spool/firstFitDecreasing.ts'
 import { leastSpools } from '../../../shared/calc/spool/leastSpools.ts'
 import { isTooLong } from '../../../shared/calc/spool/sizeStock.ts'
 import { fewestSpools, spoolsByMartelloToth, spoolsByTotal } from '../../../shared/calc/spool/spoolBounds.ts'
@@ -93,7 +120,8 @@ const calculations: Record<string, (n: () => number) => unknown> = {
   needsPlateAlong: (n) => needsPlateAlong(n()),
   deepestStudNotchIn: (n) => deepestStudNotchIn({ depthIn: n(), isBearing: true }),
   largestStudHoleIn: (n) => largestStudHoleIn({ depthIn: n(), isBearing: false }),
-  spaceFit: (n) => spaceFit({ marking: 'CMX', space: 'general', occupancy: 'other', outerDiameterMm: n(), exposedMm: n() }),
+  spaceFit: (n) =>
+    spaceFit({ marking: 'CMX', space: 'general', occupancy: 'other', outerDiameterMm: n(), exposedMm: n() }),
   entranceLengthMm: (n) => entranceLengthMm(n(), n()),
   mayEnterUnlisted: (n) => mayEnterUnlisted({ lengthMm: n(), isTerminated: true, space: 'general' }),
   labelOrigin: (n) => labelOrigin(absurdSheet(n), n(), n()),
@@ -110,7 +138,11 @@ const calculations: Record<string, (n: () => number) => unknown> = {
   crewDays: (n) => crewDays(n(), n()),
   factoredHours: (n) => factoredHours(n(), n(), n()),
   hoursByLength: (n) => hoursByLength(n(), n()),
-  labourHours: (n) => labourHours([{ quantity: n(), hoursEach: n() }, { quantity: n(), hoursEach: n() }]),
+  labourHours: (n) =>
+    labourHours([
+      { quantity: n(), hoursEach: n() },
+      { quantity: n(), hoursEach: n() },
+    ]),
   isBs2051Position: (n) => isBs2051Position('9+10+3', 'M+180', { azimuthDeg: n(), elevationDeg: n() }, n()),
   isBs775Azimuth: (n) => isBs775Azimuth('L', n(), n()),
   isBs775Height: (n) => isBs775Height('LS', n(), n(), n()),
@@ -133,22 +165,43 @@ const calculations: Record<string, (n: () => number) => unknown> = {
   markDifference: (n) => markDifference(n(), n(), n()),
   pulledLengthMm: (n) => pulledLengthMm({ start: n(), end: n(), unit: 'ft', counter: null }),
   isWithinLink: (n) => isWithinLink(n(), n(), n()),
-  markDoubts: (n) => markDoubts({ start: n(), end: n(), unit: 'm', counter: n() }, { leastMm: n(), estimateMm: n(), putUpMm: n() }),
+  markDoubts: (n) =>
+    markDoubts({ start: n(), end: n(), unit: 'm', counter: n() }, { leastMm: n(), estimateMm: n(), putUpMm: n() }),
   orderLengthMm: (n) => orderLengthMm(n(), n(), n()),
   outsidePlantLengthMm: (n) => outsidePlantLengthMm(n(), n(), n()),
   roundUpToStepMm: (n) => roundUpToStepMm(n(), n()),
   overheadLengthMm: (n) =>
     overheadLengthMm({
-      alongXMm: n(), alongYMm: n(), ceilingHeightMm: n(), boxHeightMm: n(), headHeightMm: n(), slackBoxMm: n(), slackHeadMm: n(), overheadMm: n(),
+      alongXMm: n(),
+      alongYMm: n(),
+      ceilingHeightMm: n(),
+      boxHeightMm: n(),
+      headHeightMm: n(),
+      slackBoxMm: n(),
+      slackHeadMm: n(),
+      overheadMm: n(),
     }),
   storeyLengthMm: (n) =>
     storeyLengthMm({
-      alongXMm: n(), alongYMm: n(), lowerCeilingHeightMm: n(), headHeightMm: n(), floorDepthMm: n(), upperBoxHeightMm: n(), slackBoxMm: n(),
-      slackHeadMm: n(), passedWallHeightsMm: [n()],
+      alongXMm: n(),
+      alongYMm: n(),
+      lowerCeilingHeightMm: n(),
+      headHeightMm: n(),
+      floorDepthMm: n(),
+      upperBoxHeightMm: n(),
+      slackBoxMm: n(),
+      slackHeadMm: n(),
+      passedWallHeightsMm: [n()],
     }),
   underfloorLengthMm: (n) =>
     underfloorLengthMm({
-      alongXMm: n(), alongYMm: n(), boxHeightMm: n(), headHeightMm: n(), floorThicknessMm: n(), slackBoxMm: n(), slackHeadMm: n(),
+      alongXMm: n(),
+      alongYMm: n(),
+      boxHeightMm: n(),
+      headHeightMm: n(),
+      floorThicknessMm: n(),
+      slackBoxMm: n(),
+      slackHeadMm: n(),
     }),
   framedWallHeightIn: (n) => framedWallHeightIn(n(), n()),
   bendsTotalDeg: (n) => bendsTotalDeg([n(), n()]),
@@ -173,7 +226,8 @@ const calculations: Record<string, (n: () => number) => unknown> = {
   countForLongPull: (n) => countForLongPull(n(), n(), [n()]),
   reducedCount: (n) => reducedCount('1', n()),
   reducedSize: (n) => reducedSize(n(), n()),
-  sleeveFill: (n) => sleeveFill({ insideDiameterIn: n(), listedFillPercent: n() }, [{ cables: n(), outerDiameterIn: n() }]),
+  sleeveFill: (n) =>
+    sleeveFill({ insideDiameterIn: n(), listedFillPercent: n() }, [{ cables: n(), outerDiameterIn: n() }]),
   smallestRaceway: (n) => smallestRaceway('EMT', { cablesIn2: n(), cables: n() }),
   circuitFactor: (n) => circuitFactor(n()),
   equivalentCircuits: (n) => equivalentCircuits(3, n()),
@@ -182,8 +236,15 @@ const calculations: Record<string, (n: () => number) => unknown> = {
   separationTia569In: (n) => separationTia569In('open-open', n()),
   cutPlan: (n) =>
     cutPlan({
-      runs: [{ id: 'a', lengthMm: n() }, { id: 'b', lengthMm: n() }], putUps: [{ id: 'p', lengthMm: n() }], onHand: [{ id: 's', leftMm: n() }],
-      stubMm: n(), reserve: n(), effort: 1000,
+      runs: [
+        { id: 'a', lengthMm: n() },
+        { id: 'b', lengthMm: n() },
+      ],
+      putUps: [{ id: 'p', lengthMm: n() }],
+      onHand: [{ id: 's', leftMm: n() }],
+      stubMm: n(),
+      reserve: n(),
+      effort: 1000,
     }),
   bestFitDecreasing: (n) => bestFitDecreasing([n(), n()], n()),
   firstFitDecreasing: (n) => firstFitDecreasing([n(), n()], n()),
@@ -201,12 +262,38 @@ const calculations: Record<string, (n: () => number) => unknown> = {
 }
 
 const absurdSheet = (n: () => number) => ({
-  widthMm: n(), heightMm: n(), columns: n(), rows: n(), labelWidthMm: n(), labelHeightMm: n(), leftMm: n(), topMm: n(), gapXMm: n(), gapYMm: n(),
+  widthMm: n(),
+  heightMm: n(),
+  columns: n(),
+  rows: n(),
+  labelWidthMm: n(),
+  labelHeightMm: n(),
+  leftMm: n(),
+  topMm: n(),
+  gapXMm: n(),
+  gapYMm: n(),
 })
 
 /** Numbers that nobody measures, and some that somebody does, so that not every call ends at its guard. */
 const number = fc.oneof(
-  fc.constantFrom(Number.NaN, Infinity, -Infinity, -1, -0, 0, 1, 2, 3, 10, 0.5, 1e-320, 1e-9, 1e9, 1e308, Number.MAX_SAFE_INTEGER),
+  fc.constantFrom(
+    Number.NaN,
+    Infinity,
+    -Infinity,
+    -1,
+    -0,
+    0,
+    1,
+    2,
+    3,
+    10,
+    0.5,
+    1e-320,
+    1e-9,
+    1e9,
+    1e308,
+    Number.MAX_SAFE_INTEGER,
+  ),
   fc.double({ noNaN: true, noDefaultInfinity: true, min: 0, max: 1000 }),
   fc.integer({ min: 0, max: 200 }),
 )
@@ -218,15 +305,18 @@ function numbersIn(result: unknown): number[] {
 }
 
 describe('absurd input', () => {
-  it.each(Object.keys(calculations))('to %s gives null or plain numbers, never NaN, Infinity or an exception', (name) => {
-    fc.assert(
-      fc.property(fc.array(number, { minLength: 12, maxLength: 12 }), (drawn) => {
-        let at = 0
-        const result = calculations[name]?.(() => drawn[at++ % drawn.length] ?? 0)
-        expect(result).not.toBeUndefined()
-        expect(numbersIn(result).filter((value) => !Number.isFinite(value))).toEqual([])
-      }),
-      { numRuns: 300 },
-    )
-  })
+  it.each(Object.keys(calculations))(
+    'to %s gives null or plain numbers, never NaN, Infinity or an exception',
+    (name) => {
+      fc.assert(
+        fc.property(fc.array(number, { minLength: 12, maxLength: 12 }), (drawn) => {
+          let at = 0
+          const result = calculations[name]?.(() => drawn[at++ % drawn.length] ?? 0)
+          expect(result).not.toBeUndefined()
+          expect(numbersIn(result).filter((value) => !Number.isFinite(value))).toEqual([])
+        }),
+        { numRuns: 300 },
+      )
+    },
+  )
 })

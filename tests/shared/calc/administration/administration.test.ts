@@ -17,10 +17,13 @@ describe('link identifiers (TIA-606)', () => {
     expect(readLinkIdentifier('12BC-AA0123')).toEqual({ floor: 12, space: 'BC', panel: 'AA', port: 123 })
   })
 
-  it.each(['', 'A-A47', '1A A47', '1a-a47', '1A-A4', '1A-A47 ', '123A-A47', '1A-AAA47', '1A-A12345'])('refuse %j', (text) => {
-    expect(isLinkIdentifier(text)).toBe(false)
-    expect(readLinkIdentifier(text)).toBeNull()
-  })
+  it.each(['', 'A-A47', '1A A47', '1a-a47', '1A-A4', '1A-A47 ', '123A-A47', '1A-AAA47', '1A-A12345'])(
+    'refuse %j',
+    (text) => {
+      expect(isLinkIdentifier(text)).toBe(false)
+      expect(readLinkIdentifier(text)).toBeNull()
+    },
+  )
 })
 
 describe('administration class', () => {

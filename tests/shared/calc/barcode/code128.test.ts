@@ -10,12 +10,15 @@ import { barHeightMm, code128Modules, code128WidthMm } from '../../../../shared/
 /** Reads a symbol's modules back by its patterns alone: an independent way round. */
 function decode(modules: string): string {
   const patterns = new Map(code128Widths.slice(0, 106).map((_, value) => [code128Pattern(value), value]))
-  const values = Array.from({ length: (modules.length - 13) / 11 }, (_, place) => patterns.get(modules.slice(place * 11, place * 11 + 11))!)
+  const values = Array.from({ length: (modules.length - 13) / 11 }, (_, place) =>
+    patterns.get(modules.slice(place * 11, place * 11 + 11))!,
+  )
   let set = 'ABC'[values[0]! - 103]!
   let out = ''
   for (let place = 1; place < values.length - 1; place++) {
     const value = values[place]!
-    const read = (from: string, code: number) => (from === 'A' && code >= 64 ? String.fromCharCode(code - 64) : String.fromCharCode(code + 32))
+    const read = (from: string, code: number) =>
+      from === 'A' && code >= 64 ? String.fromCharCode(code - 64) : String.fromCharCode(code + 32)
     if (set === 'C') {
       if (value < 100) out += String(value).padStart(2, '0')
       else set = value === 100 ? 'B' : 'A'
@@ -66,12 +69,19 @@ describe('check value', () => {
 describe('encoding', () => {
   it('reads back as it was written, whatever ASCII text', () => {
     fc.assert(
-      fc.property(fc.string({ unit: fc.integer({ min: 0, max: 127 }).map((code) => String.fromCharCode(code)), minLength: 1, maxLength: 24 }), (text) => {
-        const symbol = encodeCode128(text)!
-        expect(decode(symbol.modules)).toBe(text)
-        expect(symbol.check).toBe(code128Check(symbol.start, symbol.values))
-        expect(symbol.modules).toHaveLength(code128Modules(symbol.values.length)!)
-      }),
+      fc.property(
+        fc.string({
+          unit: fc.integer({ min: 0, max: 127 }).map((code) => String.fromCharCode(code)),
+          minLength: 1,
+          maxLength: 24,
+        }),
+        (text) => {
+          const symbol = encodeCode128(text)!
+          expect(decode(symbol.modules)).toBe(text)
+          expect(symbol.check).toBe(code128Check(symbol.start, symbol.values))
+          expect(symbol.modules).toHaveLength(code128Modules(symbol.values.length)!)
+        },
+      ),
     )
   })
 
@@ -108,17 +118,27 @@ describe('size', () => {
   })
 
   it('fits whole printer dots into the room, and says when it does not', () => {
-    expect(fitBarcode({ characters: 7, roomMm: 40, dotsPerInch: 300 })).toMatchObject({ dotsPerModule: 3, moduleMm: 0.254 })
+    expect(fitBarcode({ characters: 7, roomMm: 40, dotsPerInch: 300 })).toMatchObject({
+      dotsPerModule: 3,
+      moduleMm: 0.254,
+    })
     expect(fitBarcode({ characters: 7, roomMm: 25, dotsPerInch: 300 })).toBeNull()
-    expect(fitBarcode({ characters: 7, roomMm: 25, dotsPerInch: 300, leastModuleMm: 0.16 })).toMatchObject({ dotsPerModule: 2 })
+    expect(fitBarcode({ characters: 7, roomMm: 25, dotsPerInch: 300, leastModuleMm: 0.16 })).toMatchObject({
+      dotsPerModule: 2,
+    })
     fc.assert(
-      fc.property(fc.integer({ min: 1, max: 24 }), fc.integer({ min: 5, max: 200 }), fc.constantFrom(203, 300, 600), (characters, roomMm, dotsPerInch) => {
-        const fit = fitBarcode({ characters, roomMm, dotsPerInch })
-        if (fit !== null) {
-          expect(fit.widthMm).toBeLessThanOrEqual(roomMm + 1e-6)
-          expect(fit.widthMm).toBeCloseTo(code128WidthMm(characters, fit.moduleMm)!, 9)
-        }
-      }),
+      fc.property(
+        fc.integer({ min: 1, max: 24 }),
+        fc.integer({ min: 5, max: 200 }),
+        fc.constantFrom(203, 300, 600),
+        (characters, roomMm, dotsPerInch) => {
+          const fit = fitBarcode({ characters, roomMm, dotsPerInch })
+          if (fit !== null) {
+            expect(fit.widthMm).toBeLessThanOrEqual(roomMm + 1e-6)
+            expect(fit.widthMm).toBeCloseTo(code128WidthMm(characters, fit.moduleMm)!, 9)
+          }
+        },
+      ),
     )
   })
 })

@@ -32,11 +32,19 @@ describe('QR capacity (ISO/IEC 18004)', () => {
     expect(qrVersionFor(2954, 'L')).toBeNull()
     expect(qrVersionFor(-1, 'L')).toBeNull()
     fc.assert(
-      fc.property(fc.integer({ min: 0, max: 1273 }), fc.constantFrom(...qrLevels), fc.constantFrom(...qrModes), (count, level, mode) => {
-        const version = qrVersionFor(count, level, mode)
-        if (version === null) return qrCapacity(40, level, mode)! < count
-        return qrCapacity(version, level, mode)! >= count && (version === 1 || qrCapacity(version - 1, level, mode)! < count)
-      }),
+      fc.property(
+        fc.integer({ min: 0, max: 1273 }),
+        fc.constantFrom(...qrLevels),
+        fc.constantFrom(...qrModes),
+        (count, level, mode) => {
+          const version = qrVersionFor(count, level, mode)
+          if (version === null) return qrCapacity(40, level, mode)! < count
+          return (
+            qrCapacity(version, level, mode)! >= count &&
+            (version === 1 || qrCapacity(version - 1, level, mode)! < count)
+          )
+        },
+      ),
     )
   })
 

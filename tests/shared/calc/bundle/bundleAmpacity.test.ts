@@ -1,6 +1,17 @@
 import { describe, expect, it } from 'vitest'
-import { ambientFactor, bundleAmpacityA, halfLoadedAmpacityA, isBundleExempt, largestBundle } from '../../../../shared/calc/bundle/bundleAmpacity.ts'
-import { bundleAmpacityTable, bundleColumns, bundleGauges, cableRatingsC } from '../../../../shared/calc/bundle/bundleAmpacity.table.ts'
+import {
+  ambientFactor,
+  bundleAmpacityA,
+  halfLoadedAmpacityA,
+  isBundleExempt,
+  largestBundle,
+} from '../../../../shared/calc/bundle/bundleAmpacity.ts'
+import {
+  bundleAmpacityTable,
+  bundleColumns,
+  bundleGauges,
+  cableRatingsC,
+} from '../../../../shared/calc/bundle/bundleAmpacity.table.ts'
 
 describe('ampacity of powered bundles (NEC 2020 Table 725.144, from memory)', () => {
   it('falls with the bundle and rises with the rating', () => {

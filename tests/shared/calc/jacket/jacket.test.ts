@@ -25,20 +25,28 @@ describe('substitution (what-when-how.com Tables 5.3 and 5.7)', () => {
 
   it('never gives a lower voltage class, CATV for CM, or conductive for non-conductive fibre', () => {
     const of = (pattern: RegExp) => listedMarkings.filter((marking) => pattern.test(marking))
-    for (const have of of(/^CL2/)) for (const need of of(/^(CL3|CM)/)) expect(mayReplace(have, need), `${have} ${need}`).toBe(false)
-    for (const have of of(/^CATV/)) for (const need of of(/^(CM|CL)/)) expect(mayReplace(have, need), `${have} ${need}`).toBe(false)
-    for (const have of of(/^OFC/)) for (const need of of(/^OFN/)) expect(mayReplace(have, need), `${have} ${need}`).toBe(false)
-    for (const have of of(/^OF/)) for (const need of of(/^C/)) expect(mayReplace(have, need), `${have} ${need}`).toBe(false)
+    for (const have of of(/^CL2/))
+      for (const need of of(/^(CL3|CM)/)) expect(mayReplace(have, need), `${have} ${need}`).toBe(false)
+    for (const have of of(/^CATV/))
+      for (const need of of(/^(CM|CL)/)) expect(mayReplace(have, need), `${have} ${need}`).toBe(false)
+    for (const have of of(/^OFC/))
+      for (const need of of(/^OFN/)) expect(mayReplace(have, need), `${have} ${need}`).toBe(false)
+    for (const have of of(/^OF/))
+      for (const need of of(/^C/)) expect(mayReplace(have, need), `${have} ${need}`).toBe(false)
   })
 
   it('never lets a lesser flame rating stand for a greater', () => {
-    const rank = (marking: string) => (marking === 'PLTC' ? 1 : marking.endsWith('P') ? 3 : marking.endsWith('R') ? 2 : marking.endsWith('X') ? 0 : 1)
-    for (const need of listedMarkings) for (const have of replacementsOf(need)) expect(rank(have)).toBeGreaterThanOrEqual(rank(need))
+    const rank = (marking: string) =>
+      marking === 'PLTC' ? 1 : marking.endsWith('P') ? 3 : marking.endsWith('R') ? 2 : marking.endsWith('X') ? 0 : 1
+    for (const need of listedMarkings)
+      for (const have of replacementsOf(need)) expect(rank(have)).toBeGreaterThanOrEqual(rank(need))
   })
 
   it('carries on: what stands in for a stand-in stands in', () => {
     const marking = fc.constantFrom(...listedMarkings)
-    fc.assert(fc.property(marking, marking, marking, (a, b, c) => !(mayReplace(a, b) && mayReplace(b, c)) || mayReplace(a, c)))
+    fc.assert(
+      fc.property(marking, marking, marking, (a, b, c) => !(mayReplace(a, b) && mayReplace(b, c)) || mayReplace(a, c)),
+    )
   })
 
   it('gives unmarked cable nothing', () => {
@@ -67,7 +75,9 @@ describe('spaces', () => {
 
   it('take X types under 1/4 in in a small dwelling, elsewhere in raceway or exposed to 10 ft', () => {
     expect(reason({ marking: 'CMX', occupancy: 'one or two family', outerDiameterMm: 6.3 })).toBe('fits')
-    expect(reason({ marking: 'CMX', occupancy: 'one or two family', outerDiameterMm: 6.35 })).toBe('too thick for an X type')
+    expect(reason({ marking: 'CMX', occupancy: 'one or two family', outerDiameterMm: 6.35 })).toBe(
+      'too thick for an X type',
+    )
     expect(reason({ marking: 'CL2X' })).toBe('X type outside a dwelling')
     expect(reason({ marking: 'CL2X', inRaceway: true })).toBe('fits')
     expect(reason({ marking: 'CL2X', exposedMm: 3048 })).toBe('fits')

@@ -33,7 +33,10 @@ describe('label sheets', () => {
     expect(labelPlace(sheet, 0, { startAt: 1 })).toMatchObject({ sheet: 0, row: 0, column: 0, xMm: 4.75, yMm: 10.7 })
     expect(labelPlace(sheet, 0, { startAt: 7 })).toMatchObject({ sheet: 0, row: 1, column: 1 })
     expect(labelPlace(sheet, 60, { startAt: 7 })).toMatchObject({ sheet: 1, row: 0, column: 1 })
-    expect(labelPlace(sheet, 0, { startAt: 1, offsetXMm: 0.5, offsetYMm: -0.25 })).toMatchObject({ xMm: 5.25, yMm: 10.45 })
+    expect(labelPlace(sheet, 0, { startAt: 1, offsetXMm: 0.5, offsetYMm: -0.25 })).toMatchObject({
+      xMm: 5.25,
+      yMm: 10.45,
+    })
     expect(labelPlace(sheet, 0, { startAt: 66 })).toBeNull()
     expect(labelPlace(sheet, -1, { startAt: 1 })).toBeNull()
   })
@@ -64,9 +67,13 @@ describe('wrap labels', () => {
 
   it('fit exactly the cable that they are long enough for', () => {
     fc.assert(
-      fc.property(fc.double({ min: 1, max: 40, noNaN: true }), fc.double({ min: 0, max: 30, noNaN: true }), (diameter, print) => {
-        expect(wrapLargestDiameterMm(wrapLeastLengthMm(diameter, print, 0)!, print)).toBeCloseTo(diameter, 6)
-      }),
+      fc.property(
+        fc.double({ min: 1, max: 40, noNaN: true }),
+        fc.double({ min: 0, max: 30, noNaN: true }),
+        (diameter, print) => {
+          expect(wrapLargestDiameterMm(wrapLeastLengthMm(diameter, print, 0)!, print)).toBeCloseTo(diameter, 6)
+        },
+      ),
     )
   })
 })

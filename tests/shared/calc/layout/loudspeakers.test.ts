@@ -1,8 +1,18 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import { bs2051Channel, bs2051Count, isBs2051Position } from '../../../../shared/calc/layout/bs2051.ts'
-import { bs2051Channels, bs2051HomeNames, type Bs2051Layout, bs2051Systems } from '../../../../shared/calc/layout/bs2051.table.ts'
-import { isBs775Azimuth, isBs775Height, pictureAngleDeg, surroundAzimuthsDeg } from '../../../../shared/calc/layout/bs775.ts'
+import {
+  bs2051Channels,
+  bs2051HomeNames,
+  type Bs2051Layout,
+  bs2051Systems,
+} from '../../../../shared/calc/layout/bs2051.table.ts'
+import {
+  isBs775Azimuth,
+  isBs775Height,
+  pictureAngleDeg,
+  surroundAzimuthsDeg,
+} from '../../../../shared/calc/layout/bs775.ts'
 import { amplifierChannels, channelCount } from '../../../../shared/calc/layout/channelCount.ts'
 import { azimuthOfDeg, polarPosition } from '../../../../shared/calc/layout/polarPosition.ts'
 import { speakerElevationDeg, speakerHeightM } from '../../../../shared/calc/layout/speakerHeight.ts'
@@ -17,11 +27,15 @@ describe('positions in plan', () => {
 
   it('give their azimuth back', () => {
     fc.assert(
-      fc.property(fc.double({ min: 0.5, max: 20, noNaN: true }), fc.integer({ min: -179, max: 179 }), (distance, azimuth) => {
-        const { x, y } = polarPosition(distance, azimuth)!
-        expect(azimuthOfDeg(x, y)).toBeCloseTo(azimuth, 6)
-        expect(Math.hypot(x, y)).toBeCloseTo(distance, 9)
-      }),
+      fc.property(
+        fc.double({ min: 0.5, max: 20, noNaN: true }),
+        fc.integer({ min: -179, max: 179 }),
+        (distance, azimuth) => {
+          const { x, y } = polarPosition(distance, azimuth)!
+          expect(azimuthOfDeg(x, y)).toBeCloseTo(azimuth, 6)
+          expect(Math.hypot(x, y)).toBeCloseTo(distance, 9)
+        },
+      ),
     )
   })
 })
@@ -118,7 +132,13 @@ describe('channels', () => {
     expect(channelCount('7.1')).toEqual({ amplifierChannels: 7, subwoofers: 1, outputs: 8 })
     expect(channelCount('7.2.4')).toEqual({ amplifierChannels: 11, subwoofers: 2, outputs: 13 })
     expect(channelCount('7.1', true)?.amplifierChannels).toBe(8)
-    expect(['7', '', '7.1.4.2', 'a.b', '7.-1'].map((format) => channelCount(format))).toEqual([null, null, null, null, null])
+    expect(['7', '', '7.1.4.2', 'a.b', '7.-1'].map((format) => channelCount(format))).toEqual([
+      null,
+      null,
+      null,
+      null,
+      null,
+    ])
   })
 
   it('add two for each stereo zone', () => {
@@ -136,9 +156,13 @@ describe('heights', () => {
     expect(speakerElevationDeg(1.2, 0)).toBeNull()
     expect(speakerHeightM(2, 90)).toBeNull()
     fc.assert(
-      fc.property(fc.double({ min: 0.1, max: 10, noNaN: true }), fc.integer({ min: -80, max: 80 }), (distance, elevation) => {
-        expect(speakerElevationDeg(speakerHeightM(distance, elevation)!, distance)).toBeCloseTo(elevation, 6)
-      }),
+      fc.property(
+        fc.double({ min: 0.1, max: 10, noNaN: true }),
+        fc.integer({ min: -80, max: 80 }),
+        (distance, elevation) => {
+          expect(speakerElevationDeg(speakerHeightM(distance, elevation)!, distance)).toBeCloseTo(elevation, 6)
+        },
+      ),
     )
   })
 })

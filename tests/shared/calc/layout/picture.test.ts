@@ -1,7 +1,13 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import { highestCommon, sharedFormat } from '../../../../shared/calc/layout/sharedFormat.ts'
-import { isTopWithin, pictureWidth, topAngleDeg, viewingAngleDeg, viewingDistance } from '../../../../shared/calc/layout/viewingDistance.ts'
+import {
+  isTopWithin,
+  pictureWidth,
+  topAngleDeg,
+  viewingAngleDeg,
+  viewingDistance,
+} from '../../../../shared/calc/layout/viewingDistance.ts'
 
 describe('viewing', () => {
   it('is 1.63 diagonals at 30 degrees and 2.17 widths at 26', () => {

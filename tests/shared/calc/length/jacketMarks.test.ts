@@ -44,7 +44,10 @@ describe('doubts about marks', () => {
     expect(markDoubts(marks(0), run)).toEqual(['same mark'])
     expect(markDoubts(marks(60), run)).toEqual(['shorter than the way'])
     expect(markDoubts(marks(400), run)).toEqual(['much longer than the way'])
-    expect(markDoubts({ start: 0, end: 1100, unit: 'ft', counter: null }, run)).toEqual(['longer than the put-up', 'much longer than the way'])
+    expect(markDoubts({ start: 0, end: 1100, unit: 'ft', counter: null }, run)).toEqual([
+      'longer than the put-up',
+      'much longer than the way',
+    ])
   })
 
   it('allow for marks that stand every two feet', () => {

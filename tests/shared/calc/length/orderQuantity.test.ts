@@ -2,7 +2,12 @@ import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import { boxesByRuns, boxesByTotal } from '../../../../shared/calc/length/boxCount.ts'
 import { isWithinLink } from '../../../../shared/calc/length/linkLimit.ts'
-import { orderLengthMm, outsidePlantLengthMm, roundUpToStepMm, usualWaste } from '../../../../shared/calc/length/orderQuantity.ts'
+import {
+  orderLengthMm,
+  outsidePlantLengthMm,
+  roundUpToStepMm,
+  usualWaste,
+} from '../../../../shared/calc/length/orderQuantity.ts'
 import { bicsiSlack, residentialSlack } from '../../../../shared/calc/length/slack.table.ts'
 import { storedSlackMm } from '../../../../shared/calc/length/storedSlack.ts'
 

@@ -8,7 +8,13 @@ import { underfloorLengthMm } from '../../../../shared/calc/length/underfloorLen
 import { framedWallHeightIn, precutStudsIn } from '../../../../shared/calc/length/wallHeight.ts'
 
 const overhead = {
-  alongXMm: 7315, alongYMm: -4877, ceilingHeightMm: 2743, boxHeightMm: 406, headHeightMm: 1219, slackBoxMm: 305, slackHeadMm: 3048,
+  alongXMm: 7315,
+  alongYMm: -4877,
+  ceilingHeightMm: 2743,
+  boxHeightMm: 406,
+  headHeightMm: 1219,
+  slackBoxMm: 305,
+  slackHeadMm: 3048,
 }
 const length = fc.integer({ min: 0, max: 100_000 })
 
@@ -34,7 +40,11 @@ describe('a run over the ceiling', () => {
   it('never gets shorter with more slack or distance', () => {
     fc.assert(
       fc.property(length, length, (more, slack) => {
-        const longer = overheadLengthMm({ ...overhead, alongXMm: overhead.alongXMm + more, slackBoxMm: overhead.slackBoxMm + slack })
+        const longer = overheadLengthMm({
+          ...overhead,
+          alongXMm: overhead.alongXMm + more,
+          slackBoxMm: overhead.slackBoxMm + slack,
+        })
         expect(longer).toBe(overheadLengthMm(overhead)! + more + slack)
       }),
     )
@@ -42,10 +52,24 @@ describe('a run over the ceiling', () => {
 })
 
 describe('other ways', () => {
-  const under = { alongXMm: 3000, alongYMm: 2000, boxHeightMm: 400, headHeightMm: 1200, floorThicknessMm: 300, slackBoxMm: 300, slackHeadMm: 3000 }
+  const under = {
+    alongXMm: 3000,
+    alongYMm: 2000,
+    boxHeightMm: 400,
+    headHeightMm: 1200,
+    floorThicknessMm: 300,
+    slackBoxMm: 300,
+    slackHeadMm: 3000,
+  }
   const storey = {
-    alongXMm: 3000, alongYMm: 0, lowerCeilingHeightMm: 2440, headHeightMm: 1500, floorDepthMm: 300, upperBoxHeightMm: 400,
-    slackBoxMm: 300, slackHeadMm: 3000,
+    alongXMm: 3000,
+    alongYMm: 0,
+    lowerCeilingHeightMm: 2440,
+    headHeightMm: 1500,
+    floorDepthMm: 300,
+    upperBoxHeightMm: 400,
+    slackBoxMm: 300,
+    slackHeadMm: 3000,
   }
 
   it('goes down both walls and through the floor twice', () => {

@@ -12,14 +12,24 @@ import { smallestRaceway } from '../../../../shared/calc/pathway/smallestRaceway
 const diameters = [0.2, 0.23, 0.24, 0.27, 0.29, 0.3, 0.35, 0.405]
 /** Counts by the 53/31/40 rule, worked out once with a second implementation from NEC Chapter 9 Tables 1 and 4. */
 const emt: [TradeSize, number[]][] = [
-  ['1/2', [3, 2, 2, 1, 1, 1, 1, 1]], ['3/4', [6, 5, 4, 3, 3, 3, 1, 1]], ['1', [11, 8, 7, 6, 5, 4, 3, 2]],
-  ['1-1/4', [19, 14, 13, 10, 9, 8, 6, 4]], ['1-1/2', [25, 19, 18, 14, 12, 11, 8, 6]], ['2', [42, 32, 29, 23, 20, 18, 13, 10]],
-  ['2-1/2', [74, 56, 51, 40, 35, 33, 24, 18]], ['3', [112, 85, 78, 61, 53, 50, 36, 27]], ['3-1/2', [146, 111, 102, 80, 69, 65, 47, 35]],
+  ['1/2', [3, 2, 2, 1, 1, 1, 1, 1]],
+  ['3/4', [6, 5, 4, 3, 3, 3, 1, 1]],
+  ['1', [11, 8, 7, 6, 5, 4, 3, 2]],
+  ['1-1/4', [19, 14, 13, 10, 9, 8, 6, 4]],
+  ['1-1/2', [25, 19, 18, 14, 12, 11, 8, 6]],
+  ['2', [42, 32, 29, 23, 20, 18, 13, 10]],
+  ['2-1/2', [74, 56, 51, 40, 35, 33, 24, 18]],
+  ['3', [112, 85, 78, 61, 53, 50, 36, 27]],
+  ['3-1/2', [146, 111, 102, 80, 69, 65, 47, 35]],
   ['4', [187, 142, 130, 103, 89, 83, 61, 45]],
 ]
 const ent: [TradeSize, number[]][] = [
-  ['1/2', [3, 1, 1, 1, 1, 1, 1, 1]], ['3/4', [5, 4, 4, 3, 2, 1, 1, 1]], ['1', [9, 7, 6, 5, 4, 4, 3, 1]],
-  ['1-1/4', [17, 13, 12, 9, 8, 7, 5, 4]], ['1-1/2', [24, 18, 17, 13, 11, 10, 8, 6]], ['2', [40, 30, 28, 22, 19, 18, 13, 9]],
+  ['1/2', [3, 1, 1, 1, 1, 1, 1, 1]],
+  ['3/4', [5, 4, 4, 3, 2, 1, 1, 1]],
+  ['1', [9, 7, 6, 5, 4, 4, 3, 1]],
+  ['1-1/4', [17, 13, 12, 9, 8, 7, 5, 4]],
+  ['1-1/2', [24, 18, 17, 13, 11, 10, 8, 6]],
+  ['2', [40, 30, 28, 22, 19, 18, 13, 9]],
 ]
 
 describe('cables in a raceway', () => {
@@ -33,12 +43,17 @@ describe('cables in a raceway', () => {
 
   it('is the largest number within its own share, as counting one by one finds it', () => {
     fc.assert(
-      fc.property(fc.double({ min: 0.1, max: 15, noNaN: true }), fc.double({ min: 0.1, max: 1, noNaN: true }), (area, diameter) => {
-        const each = (Math.PI / 4) * diameter ** 2
-        let most = 0
-        for (let cables = 1; cables < 1000; cables++) if (cables * each <= fillLimitShare(cables)! * area) most = cables
-        expect(cablesInRaceway(area, diameter)).toBe(most)
-      }),
+      fc.property(
+        fc.double({ min: 0.1, max: 15, noNaN: true }),
+        fc.double({ min: 0.1, max: 1, noNaN: true }),
+        (area, diameter) => {
+          const each = (Math.PI / 4) * diameter ** 2
+          let most = 0
+          for (let cables = 1; cables < 1000; cables++)
+            if (cables * each <= fillLimitShare(cables)! * area) most = cables
+          expect(cablesInRaceway(area, diameter)).toBe(most)
+        },
+      ),
     )
   })
 
@@ -60,7 +75,12 @@ describe('fill', () => {
   })
 
   it('adds mixed cables up', () => {
-    expect(cablesAreaIn2([{ cables: 4, outerDiameterIn: 0.24 }, { cables: 2, outerDiameterIn: 0.27 }])).toBeCloseTo(0.2955, 4)
+    expect(
+      cablesAreaIn2([
+        { cables: 4, outerDiameterIn: 0.24 },
+        { cables: 2, outerDiameterIn: 0.27 },
+      ]),
+    ).toBeCloseTo(0.2955, 4)
     expect(cablesAreaIn2([])).toBe(0)
     expect(cablesAreaIn2([{ cables: 1.5, outerDiameterIn: 0.2 }])).toBeNull()
     expect(summedAreaIn2([{ cables: 3, areaIn2: 0.0133 }])).toBeCloseTo(0.0399, 9)
@@ -87,8 +107,16 @@ describe('a sleeve', () => {
   const lots = [{ cables: 10, outerDiameterIn: 0.24 }]
 
   it('goes by its listing, else by 40 %', () => {
-    expect(sleeveFill({ insideDiameterIn: 1.049, listedFillPercent: null }, lots)).toMatchObject({ limitPercent: 40, isOver: true, isListed: false })
-    expect(sleeveFill({ insideDiameterIn: 1.049, listedFillPercent: 60 }, lots)).toMatchObject({ limitPercent: 60, isOver: false, isListed: true })
+    expect(sleeveFill({ insideDiameterIn: 1.049, listedFillPercent: null }, lots)).toMatchObject({
+      limitPercent: 40,
+      isOver: true,
+      isListed: false,
+    })
+    expect(sleeveFill({ insideDiameterIn: 1.049, listedFillPercent: 60 }, lots)).toMatchObject({
+      limitPercent: 60,
+      isOver: false,
+      isListed: true,
+    })
   })
 
   it('is nothing without a bore or with a listing over 100 %', () => {

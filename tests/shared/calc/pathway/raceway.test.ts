@@ -1,11 +1,17 @@
 import { describe, expect, it } from 'vitest'
-import { entAlternativeAreasIn2, racewayKinds, racewayTable, tradeSizes } from '../../../../shared/calc/pathway/raceway.table.ts'
+import {
+  entAlternativeAreasIn2,
+  racewayKinds,
+  racewayTable,
+  tradeSizes,
+} from '../../../../shared/calc/pathway/raceway.table.ts'
 import { boreAreaIn2, racewayBore, smallestBore } from '../../../../shared/calc/pathway/racewayBore.ts'
 
 describe('raceway table (NEC Chapter 9 Table 4)', () => {
   it.each(racewayKinds)('%s: each area is that of its diameter, and sizes rise', (kind) => {
     const rows = [...racewayTable[kind]]
-    for (const [size, { areaIn2, diameterIn }] of rows) expect(Math.abs(boreAreaIn2(diameterIn)! - areaIn2), size).toBeLessThan(0.003)
+    for (const [size, { areaIn2, diameterIn }] of rows)
+      expect(Math.abs(boreAreaIn2(diameterIn)! - areaIn2), size).toBeLessThan(0.003)
     const order = rows.map(([size]) => tradeSizes.indexOf(size))
     expect(order).toEqual(order.toSorted((a, b) => a - b))
     const areas = rows.map(([, { areaIn2 }]) => areaIn2)

@@ -1,5 +1,10 @@
 import { describe, expect, it } from 'vitest'
-import { circuitFactor, equivalentCircuits, separationEn2000Mm, separationEn50174Mm } from '../../../../shared/calc/separation/en50174.ts'
+import {
+  circuitFactor,
+  equivalentCircuits,
+  separationEn2000Mm,
+  separationEn50174Mm,
+} from '../../../../shared/calc/separation/en50174.ts'
 import { containments, segregationClasses } from '../../../../shared/calc/separation/en50174.table.ts'
 import { isClearOfPower, powerWirings } from '../../../../shared/calc/separation/necSeparation.ts'
 import { mayShareEnclosure } from '../../../../shared/calc/separation/sharedEnclosure.ts'
@@ -69,7 +74,9 @@ describe('EN 50174-2', () => {
 
 describe('EIA/TIA-569 (1990)', () => {
   it('has its table, with 2 and 5 kVA in the middle band', () => {
-    const rows = tia569Conditions.map((condition) => [1.9, 2, 5, 5.1].map((load) => separationTia569In(condition, load)))
+    const rows = tia569Conditions.map((condition) =>
+      [1.9, 2, 5, 5.1].map((load) => separationTia569In(condition, load)),
+    )
     expect(rows).toEqual([
       [5, 12, 12, 24],
       [2.5, 6, 6, 12],

@@ -5,8 +5,16 @@ import { type CutPlanAsk, cutPlan } from '../../../../shared/calc/spool/cutPlan.
 const foot = 304.8
 const box = { id: 'box', lengthMm: 304_800 }
 const half = { id: 'half', lengthMm: 152_400 }
-const runsOf = (...feet: number[]) => feet.map((length, place) => ({ id: `r${place}`, lengthMm: Math.round(length * foot) }))
-const ask = (change: Partial<CutPlanAsk>): CutPlanAsk => ({ runs: [], putUps: [box], onHand: [], stubMm: 0, reserve: 0, ...change })
+const runsOf = (...feet: number[]) =>
+  feet.map((length, place) => ({ id: `r${place}`, lengthMm: Math.round(length * foot) }))
+const ask = (change: Partial<CutPlanAsk>): CutPlanAsk => ({
+  runs: [],
+  putUps: [box],
+  onHand: [],
+  stubMm: 0,
+  reserve: 0,
+  ...change,
+})
 
 describe('a cut plan', () => {
   it('takes three boxes for nine runs of 210 ft', () => {
@@ -60,15 +68,30 @@ describe('a cut plan', () => {
       fc.property(fc.array(run, { maxLength: 25 }), onHand, (lengths, left) => {
         const runs = lengths.map((lengthMm, place) => ({ id: `r${place}`, lengthMm }))
         const plan = cutPlan(
-          ask({ runs, putUps: [box, half], onHand: left.map((leftMm, place) => ({ id: `s${place}`, leftMm })), stubMm: 3000, effort: 500_000 }),
+          ask({
+            runs,
+            putUps: [box, half],
+            onHand: left.map((leftMm, place) => ({ id: `s${place}`, leftMm })),
+            stubMm: 3000,
+            effort: 500_000,
+          }),
         )!
-        expect(plan.spools.flatMap(({ runIds }) => runIds).concat(plan.tooLong).toSorted()).toEqual(runs.map(({ id }) => id).toSorted())
+        expect(
+          plan.spools
+            .flatMap(({ runIds }) => runIds)
+            .concat(plan.tooLong)
+            .toSorted(),
+        ).toEqual(runs.map(({ id }) => id).toSorted())
         for (const spool of plan.spools) {
-          expect(spool.cutMm).toBe(spool.runIds.reduce((sum, id) => sum + (runs.find((one) => one.id === id)?.lengthMm ?? 0), 0))
+          expect(spool.cutMm).toBe(
+            spool.runIds.reduce((sum, id) => sum + (runs.find((one) => one.id === id)?.lengthMm ?? 0), 0),
+          )
           expect(spool.cutMm + 3000).toBeLessThanOrEqual(spool.lengthMm)
           expect(spool.leftMm).toBe(spool.lengthMm - spool.cutMm)
         }
-        expect(new Set(plan.spools.filter(({ isBought }) => !isBought).map(({ id }) => id)).size).toBe(plan.spools.filter(({ isBought }) => !isBought).length)
+        expect(new Set(plan.spools.filter(({ isBought }) => !isBought).map(({ id }) => id)).size).toBe(
+          plan.spools.filter(({ isBought }) => !isBought).length,
+        )
         expect(plan.boughtMm).toBeLessThanOrEqual(lengths.length * box.lengthMm)
       }),
       { numRuns: 60 },

@@ -1,7 +1,11 @@
 import { readFileSync } from 'node:fs'
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
-import { bestFitDecreasing, firstFitDecreasing, firstFitGuarantee } from '../../../../shared/calc/spool/firstFitDecreasing.ts'
+import {
+  bestFitDecreasing,
+  firstFitDecreasing,
+  firstFitGuarantee,
+} from '../../../../shared/calc/spool/firstFitDecreasing.ts'
 import { leastSpools } from '../../../../shared/calc/spool/leastSpools.ts'
 import { packSpools } from '../../../../shared/calc/spool/packSpools.ts'
 import { isTooLong } from '../../../../shared/calc/spool/sizeStock.ts'
@@ -66,7 +70,7 @@ describe('fewest equal spools', () => {
   })
 
   it('proves 18 where bounds by length say 17: fifty pieces, three to a spool, one spool with two', () => {
-    // Of the class "mean a third of the spool, 20 % either way" (Scholl, Klein, Juergens), made for this test: fourteen full
+    // Of the class "mean a third of the spool, 20 % either way" (Scholl, Klein, Juergens), made for this test: 14 full
     // spools of three and four of two.
     const of = (length: number, pieces: number) => Array.from<number>({ length: pieces }).fill(length)
     const lengths = [...of(400, 14), ...of(330, 14), ...of(270, 14), ...of(370, 8)]
@@ -139,7 +143,8 @@ describe('given spools of several lengths', () => {
       fc.property(fc.array(fc.integer({ min: 1, max: 25 }), { maxLength: 8 }), capacities, (lengths, rooms) => {
         const packing = packSpools(lengths, rooms, 1_000_000)
         expect(packing.outcome).toBe(fits(lengths, rooms) ? 'packed' : 'impossible')
-        if (packing.outcome === 'packed') expect(packing.spools.every((spool) => sum(spool.lengths) <= spool.capacity)).toBe(true)
+        if (packing.outcome === 'packed')
+          expect(packing.spools.every((spool) => sum(spool.lengths) <= spool.capacity)).toBe(true)
       }),
       { numRuns: 500 },
     )
