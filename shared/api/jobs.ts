@@ -52,8 +52,8 @@ export interface JobSummary {
   readonly levels: number
   /** Runs on the job, those dropped included. */
   readonly runs: number
-  /** The last command accepted: who, what, and when by the server's clock; null on a job nobody has touched. */
-  readonly lastWord: { readonly byId: string; readonly byName: string; readonly label: string; readonly at: string } | null
+  /** The last command accepted, or the making of the job: who, what, and when by the server's clock. */
+  readonly lastWord: { readonly byId: string; readonly byName: string; readonly label: string; readonly at: string }
   /** Null while it is still being worked out: ask again shortly. */
   readonly standing: JobStanding | null
 }

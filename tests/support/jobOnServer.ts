@@ -1,9 +1,21 @@
-import type { Agent } from './testApp.ts'
+import type { Express } from 'express'
+import request from 'supertest'
+import { demoPassphrase } from '../../server/demo/demoCompany.ts'
 import type { Changes, JobOpened, PushAnswer } from '../../shared/api/jobs.ts'
 import type { Command, Intent, Step } from '../../shared/commands/index.ts'
 import { buildDocument, type JobDocument } from '../../shared/model/jobDocument.ts'
 import type { JobRecord } from '../../shared/model/record.ts'
 import { smallHouse } from './build.ts'
+
+export type Agent = ReturnType<typeof request.agent>
+
+/** A browser signed in at an application, which may be a second one on the same database. */
+export async function signInAt(app: Express, email: string): Promise<Agent> {
+  const agent = request.agent(app)
+  const response = await agent.post('/api/session').send({ email, passphrase: demoPassphrase })
+  if (response.status !== 200) throw new Error(`${email} could not sign in: ${response.text}`)
+  return agent
+}
 
 let counter = 0
 export const freshId = (what: string) => `${what}-${process.pid}-${counter++}`

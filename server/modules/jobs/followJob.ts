@@ -1,4 +1,4 @@
-import type { Request, Response } from 'express'
+import type { Request } from 'express'
 import { AppError } from '../../../shared/errors.ts'
 import { can } from '../../../shared/policy.ts'
 import { whoAsks } from '../../http/registerRoutes.ts'
@@ -26,24 +26,27 @@ export async function followJob(context: JobsContext, { deps, member, request, r
 
   held.set(holder, (held.get(holder) ?? 0) + 1)
   response.writeHead(200, { 'Content-Type': 'text/event-stream', 'Cache-Control': 'no-store', 'X-Accel-Buffering': 'no' })
-  tell(response, version)
-  const unfollow = context.feed.follow(scope, (next) => tell(response, next))
-  const heartbeat = setInterval(() => response.write(': still here\n\n'), heartbeatMs)
-  const stop = () => response.end()
-  const recheck = setInterval(() => void mayStillRead(request, deps).then((may) => (may ? undefined : stop())), recheckMs)
-  deps.closing.addEventListener('abort', stop, { once: true })
-  response.once('close', () => {
+  const say = (text: string) => {
+    if (!response.writableEnded) response.write(text)
+  }
+  const tell = (next: number) => say(`id: ${next}\ndata: ${JSON.stringify({ version: next })}\n\n`)
+  const end = () => response.end()
+  tell(version)
+  const unfollow = context.feed.follow(scope, { onVersion: tell, onEnd: end })
+  const heartbeat = setInterval(() => say(': still here\n\n'), heartbeatMs)
+  const recheck = setInterval(() => void mayStillRead(request, deps).then((may) => (may ? undefined : end())), recheckMs)
+  const letGo = () => {
     unfollow()
     clearInterval(heartbeat)
     clearInterval(recheck)
-    deps.closing.removeEventListener('abort', stop)
     const left = (held.get(holder) ?? 1) - 1
     if (left) held.set(holder, left)
     else held.delete(holder)
-  })
+  }
+  // A client that left while its job was looked up has closed the response already.
+  if (response.closed || response.destroyed) letGo()
+  else response.once('close', letGo)
 }
-
-const tell = (response: Response, version: number) => response.write(`id: ${version}\ndata: ${JSON.stringify({ version })}\n\n`)
 
 async function mayStillRead(request: Request, deps: MemberContext['deps']): Promise<boolean> {
   try {

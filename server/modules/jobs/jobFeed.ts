@@ -4,17 +4,23 @@ import type { JobScope } from './documentRepo.ts'
 /** Tells whoever follows a job that it has a new version, whichever process wrote it. */
 export interface JobFeed {
   /** Returns the function that ends it. */
-  readonly follow: (scope: JobScope, onVersion: (version: number) => void) => () => void
+  readonly follow: (scope: JobScope, follower: Follower) => () => void
   /** A commit of this process: its followers hear of it at once. */
   readonly announce: (scope: JobScope, version: number) => void
-  /** Ends the loop; nobody is told anything any more. */
+  /** Ends the loop and everybody's following. */
   readonly close: () => void
+}
+
+export interface Follower {
+  readonly onVersion: (version: number) => void
+  /** The feed has closed, and this is the last it says. */
+  readonly onEnd: () => void
 }
 
 interface Followed {
   readonly scope: JobScope
   version: number
-  readonly listeners: Set<(version: number) => void>
+  readonly followers: Set<Follower>
 }
 
 export interface JobFeedOptions {
@@ -34,27 +40,31 @@ export function startJobFeed({ readVersions, onError, everyMs = 400 }: JobFeedOp
 
   return { follow, announce, close }
 
-  function follow(scope: JobScope, onVersion: (version: number) => void) {
+  function follow(scope: JobScope, follower: Follower) {
     const key = scopeKey(scope)
-    const entry = followed.get(key) ?? { scope, version: -1, listeners: new Set() }
-    entry.listeners.add(onVersion)
+    const entry = followed.get(key) ?? { scope, version: -1, followers: new Set() }
+    entry.followers.add(follower)
     followed.set(key, entry)
+    // Told already to others, maybe after this follower last asked: so it is told again.
+    if (entry.version >= 0) follower.onVersion(entry.version)
     schedule()
     return () => {
-      entry.listeners.delete(onVersion)
-      if (!entry.listeners.size && followed.get(key) === entry) followed.delete(key)
+      entry.followers.delete(follower)
+      if (!entry.followers.size && followed.get(key) === entry) followed.delete(key)
     }
   }
   function announce(scope: JobScope, version: number) {
     const entry = followed.get(scopeKey(scope))
     if (!entry || version <= entry.version) return
     entry.version = version
-    for (const listener of entry.listeners) listener(version)
+    for (const { onVersion } of entry.followers) onVersion(version)
   }
   function close() {
     closed = true
     clearTimeout(timer)
+    const all = [...followed.values()].flatMap((entry) => [...entry.followers])
     followed.clear()
+    for (const { onEnd } of all) onEnd()
   }
   function schedule() {
     if (timer || closed || !followed.size) return

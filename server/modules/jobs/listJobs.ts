@@ -1,9 +1,9 @@
 import type { JobList, JobStanding, JobSummary } from '../../../shared/api/jobs.ts'
+import { deriveJob } from '../../../shared/derive/deriveJob.ts'
 import { listMembers } from '../members/memberRepo.ts'
 import { listJobRows } from './jobRepo.ts'
 import type { JobsContext } from './jobsContext.ts'
 import { readDocument } from './readDocument.ts'
-import { standingOf } from './standingOf.ts'
 
 /** How long a list may work on what it does not know yet; the rest follows when it is asked for again. */
 const patienceMs = 1500
@@ -28,8 +28,9 @@ export async function listJobs(context: JobsContext, companyId: string): Promise
 async function workOut(context: JobsContext, scope: { companyId: string; jobId: string }): Promise<JobStanding | null> {
   try {
     const doc = await readDocument(context, scope)
-    const standing = standingOf(doc)
-    if (standing) context.standings.keep(scope, doc.version, standing)
+    const { progress, counts } = deriveJob(doc)
+    const standing = { progress, findings: counts }
+    context.standings.keep(scope, doc.version, standing)
     return standing
   } catch (error) {
     context.report(error, { doing: 'working out a job', jobId: scope.jobId })
