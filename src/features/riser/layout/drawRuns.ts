@@ -97,6 +97,7 @@ function finish({ doc }: Drawn, run: Run, ways: Ways): RunLine {
     trunk: squarePath(trunk),
     drop: ways.tails.map((tail) => roundedPath(led(tail, ways.trunk))).join(''),
     whole: roundedPath(ways.whole),
+    points: ways.whole,
     exit: ways.exit,
     storey: ways.storey,
     dropped: run.dropped !== null,

@@ -90,8 +90,10 @@ export interface RunLine {
   readonly jacket: JacketColour
   readonly trunk: string
   readonly drop: string
-  /** The whole way with round corners, for the selected run and for hits. */
+  /** The whole way with round corners, for the selected run. */
   readonly whole: string
+  /** Its corners, for finding what a pointer is on. */
+  readonly points: readonly XY[]
   /** Where it leaves the trunk: order of the walk with the arrow keys. */
   readonly exit: XY
   readonly storey: number

@@ -1,0 +1,3 @@
+import type { RouteRecordRaw } from 'vue-router'
+
+export const companyRoutes: RouteRecordRaw[] = [{ path: '/company', component: () => import('./CompanyPage.vue') }]
