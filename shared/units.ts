@@ -1,3 +1,4 @@
+import { awgAreaMm2, awgOfAreaMm2 } from './calc/conductor/awg.ts'
 import type { ConductorUnit, LengthUnit } from './model/job.ts'
 
 export type { ConductorUnit, LengthUnit }
@@ -124,23 +125,22 @@ export interface ConductorSize {
 
 /**
  * A conductor size by the job's setting: "16 AWG", "4/0 AWG", "1.5 mm²". A size known only in the other system is
- * converted by the AWG definition (ASTM B258: diameter 0.127 mm x 92^((36-n)/39)) and, into gauges, marked "about",
- * as there is no gauge for most areas. Neither known: "size not known".
+ * converted by the definition of the gauge (ASTM B258) and, into gauges, marked "about", as there is no gauge for most
+ * areas. Neither known, or out of range: "size not known".
  */
 export function formatConductor({ awg, areaMm2 }: ConductorSize, unit: ConductorUnit): string {
-  const gauge = isKnown(awg) ? awg : null
-  const area = isKnown(areaMm2) && areaMm2 > 0 ? areaMm2 : null
-  if (unit === 'awg') {
-    if (gauge !== null) return `${gaugeText(gauge)} AWG`
-    return area === null ? 'size not known' : `about ${gaugeText(Math.round(gaugeOfArea(area)))} AWG`
+  const area = areaMm2 !== null && Number.isFinite(areaMm2) && areaMm2 > 0 ? areaMm2 : null
+  const areaOfGauge = awg === null ? null : awgAreaMm2(awg)
+  if (unit === 'mm2') {
+    const mm2 = area ?? areaOfGauge
+    return mm2 === null ? 'size not known' : `${Number(mm2.toPrecision(3))} mm²`
   }
-  const mm2 = area ?? (gauge === null ? null : areaOfGauge(gauge))
-  return mm2 === null ? 'size not known' : `${Number(mm2.toPrecision(3))} mm²`
+  if (awg !== null && areaOfGauge !== null) return `${gaugeText(awg)} AWG`
+  const gauge = area === null ? null : awgOfAreaMm2(area)
+  return gauge === null ? 'size not known' : `about ${gaugeText(Math.round(gauge))} AWG`
 }
 
-const isKnown = (value: number | null): value is number => value !== null && Number.isFinite(value)
+/** 0, -1, -2 and -3 are written 1/0 to 4/0. */
 const gaugeText = (awg: number) => (awg > 0 ? String(awg) : `${1 - awg}/0`)
-const areaOfGauge = (awg: number) => (Math.PI / 4) * (0.127 * 92 ** ((36 - awg) / 39)) ** 2
-const gaugeOfArea = (mm2: number) => 36 - (39 * Math.log(Math.sqrt((4 * mm2) / Math.PI) / 0.127)) / Math.log(92)
 
 export { parseLength, type ParsedLength, type ParseLengthOptions } from './parseLength.ts'
