@@ -19,10 +19,3 @@ export function canBeCut(lengths: readonly number[], capacity: number): boolean 
   if (!Number.isFinite(capacity) || capacity <= 0) return false
   return lengths.every((length) => length > 0 && length <= capacity) && Number.isFinite(capacity * (lengths.length + 1))
 }
-
-/** Whether a run is longer than what it would be cut from; runs may not be spliced. Null: a value that is no number. */
-export function isTooLong(lengthMm: number, putUpMm: number): boolean | null {
-  return Number.isFinite(lengthMm) && Number.isFinite(putUpMm) && lengthMm >= 0 && putUpMm >= 0
-    ? lengthMm > putUpMm
-    : null
-}

@@ -1,7 +1,7 @@
 import { crewDays, factoredHours, hoursByLength, labourHours } from '../../../shared/calc/labour/labourHours.ts'
 import { firstFitDecreasing, firstFitGuarantee } from '../../../shared/calc/spool/firstFitDecreasing.ts'
 import { leastSpools } from '../../../shared/calc/spool/leastSpools.ts'
-import { isTooLong } from '../../../shared/calc/spool/sizeStock.ts'
+import { isTooLong } from '../../../shared/calc/spool/isTooLong.ts'
 import { spoolsByMartelloToth, spoolsByTotal } from '../../../shared/calc/spool/spoolBounds.ts'
 import { mmToFeet } from '../../../shared/units.ts'
 import { type Answers, feet, metres, num, nums, pairs } from './readInputs.ts'

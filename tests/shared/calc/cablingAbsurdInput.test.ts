@@ -83,7 +83,7 @@ import {
   firstFitGuarantee,
 } from '../../../shared/calc/spool/firstFitDecreasing.ts'
 import { leastSpools } from '../../../shared/calc/spool/leastSpools.ts'
-import { isTooLong } from '../../../shared/calc/spool/sizeStock.ts'
+import { isTooLong } from '../../../shared/calc/spool/isTooLong.ts'
 import { fewestSpools, spoolsByMartelloToth, spoolsByTotal } from '../../../shared/calc/spool/spoolBounds.ts'
 import { bendRadiusMm } from '../../../shared/calc/support/bendRadius.ts'
 import { newtonsOfPoundsForce } from '../../../shared/calc/support/poundsForce.ts'

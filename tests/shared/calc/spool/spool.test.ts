@@ -8,7 +8,7 @@ import {
 } from '../../../../shared/calc/spool/firstFitDecreasing.ts'
 import { leastSpools } from '../../../../shared/calc/spool/leastSpools.ts'
 import { packSpools } from '../../../../shared/calc/spool/packSpools.ts'
-import { isTooLong } from '../../../../shared/calc/spool/sizeStock.ts'
+import { isTooLong } from '../../../../shared/calc/spool/isTooLong.ts'
 import { fewestSpools, spoolsByMartelloToth, spoolsByTotal } from '../../../../shared/calc/spool/spoolBounds.ts'
 
 interface PublishedInstance {
