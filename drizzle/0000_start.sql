@@ -438,7 +438,7 @@ CREATE TABLE `sessions` (
 --> statement-breakpoint
 CREATE TABLE `sign_in_attempts` (
 	`subject` varchar(80) NOT NULL,
-	`failures` int NOT NULL,
+	`attempts` int NOT NULL,
 	`window_ends` bigint NOT NULL,
 	CONSTRAINT `sign_in_attempts_subject` PRIMARY KEY(`subject`)
 );

@@ -1,22 +1,27 @@
 import { sql } from 'drizzle-orm'
 import type { Db } from './client.ts'
 
-/** What the server must promise so that nothing acknowledged is lost when the power goes. */
-const wanted: Record<string, (value: string) => boolean> = {
-  innodb_flush_log_at_trx_commit: (value) => value === '1',
-  innodb_doublewrite: (value) => value !== 'OFF',
-  innodb_rollback_on_timeout: (value) => value === 'ON',
-  sql_mode: (value) => value.includes('STRICT_TRANS_TABLES') || value.includes('STRICT_ALL_TABLES'),
+/** What the server must promise so that nothing acknowledged is lost when the power goes (MariaDB's documentation of these variables). */
+const wanted: Record<string, { readonly good: (value: string) => boolean; readonly need: string }> = {
+  '@@GLOBAL.innodb_flush_log_at_trx_commit': { good: (value) => value === '1', need: '1' },
+  '@@GLOBAL.innodb_doublewrite': { good: (value) => isOn(value) || value === 'fast', need: 'ON' },
+  '@@GLOBAL.innodb_rollback_on_timeout': { good: isOn, need: 'ON' },
+  'IF(@@GLOBAL.log_bin, @@GLOBAL.sync_binlog, 1)': { good: (value) => value === '1', need: '1' },
+  '@@SESSION.innodb_snapshot_isolation': { good: isOn, need: 'ON' },
+  '@@SESSION.sql_mode': { good: (value) => /STRICT_(TRANS|ALL)_TABLES/.test(value), need: 'strict' },
+  '@@character_set_database': { good: (value) => value === 'utf8mb4', need: 'utf8mb4' },
 }
 
-/** The settings of the database that do not keep that promise, as sentences. */
+function isOn(value: string): boolean {
+  return value === '1' || value === 'ON'
+}
+
+/** The settings of the database that do not keep the promise, as sentences; none: it keeps what it acknowledges. */
 export async function durabilityFaults(db: Db): Promise<string[]> {
-  const faults: string[] = []
-  for (const [name, good] of Object.entries(wanted)) {
-    const [rows] = (await db.execute(sql.raw(`SELECT @@GLOBAL.${name} AS value`))) as unknown as [{ value: unknown }[]]
-    const value = String(rows[0]?.value)
-    const shown = value === '1' && name !== 'innodb_flush_log_at_trx_commit' ? 'ON' : value === '0' && name !== 'innodb_flush_log_at_trx_commit' ? 'OFF' : value
-    if (!good(shown)) faults.push(`${name} is ${shown}`)
-  }
-  return faults
+  const columns = Object.keys(wanted).map((name, index) => `${name} AS v${index}`)
+  const [rows] = (await db.execute(sql.raw(`SELECT ${columns.join(', ')}`))) as unknown as [Record<string, unknown>[]]
+  return Object.entries(wanted).flatMap(([name, { good, need }], index) => {
+    const value = String(rows[0]?.[`v${index}`])
+    return good(value) ? [] : [`${name.replace(/^@@(GLOBAL|SESSION)?\.?/, '').replace(/^IF.*/, 'sync_binlog')} is ${value}, not ${need}`]
+  })
 }

@@ -1,8 +1,6 @@
 import { drizzle, type MySql2Database } from 'drizzle-orm/mysql2'
 import mysql from 'mysql2/promise'
-
-/** A query that takes longer than this is given up: a frozen database is answered as one that is not there. */
-export const queryDeadlineMs = 5000
+import { connectionDeadlineMs, statementDeadlineMs, withDeadlines } from './deadline.ts'
 
 export type Pool = mysql.Pool
 export type Db = MySql2Database
@@ -16,7 +14,7 @@ export interface Database {
   readonly close: () => Promise<void>
 }
 
-/** Opens a pool on a MariaDB. Moments travel in UTC; a caller waits for a free connection, but never for ever. */
+/** Opens a pool on a MariaDB. Moments travel in UTC; no caller and no statement waits for ever. */
 export function openDatabase(url: string, connectionLimit = 10): Database {
   const pool = mysql.createPool({
     uri: url,
@@ -26,13 +24,22 @@ export function openDatabase(url: string, connectionLimit = 10): Database {
     charset: 'utf8mb4',
     dateStrings: true,
     supportBigNumbers: true,
-    connectTimeout: queryDeadlineMs,
+    connectTimeout: connectionDeadlineMs,
     enableKeepAlive: true,
     multipleStatements: false,
   })
   // Read-modify-write must fail rather than lose an update; a statement that runs away is stopped by the server too.
-  pool.pool.on('connection', (connection: { query: (sql: string) => void }) => {
-    connection.query(`SET SESSION innodb_snapshot_isolation = ON, SESSION max_statement_time = ${queryDeadlineMs / 1000}, SESSION time_zone = '+00:00'`)
+  pool.pool.on('connection', (connection: NewConnection) => {
+    const settings = `innodb_snapshot_isolation = ON, SESSION max_statement_time = ${(statementDeadlineMs - 100) / 1000}, SESSION time_zone = '+00:00'`
+    // A connection without these promises is not one to work on; the start-up check then says which are missing.
+    connection.query(`SET SESSION ${settings}`, (error) => error && connection.destroy())
   })
-  return { pool, db: drizzle(pool), close: () => pool.end() }
+  const guarded = withDeadlines(pool, { connectionMs: connectionDeadlineMs, statementMs: statementDeadlineMs })
+  return { pool: guarded, db: drizzle(guarded), close: () => pool.end() }
+}
+
+/** As the pool hands it over: the driver's own kind, with callbacks. */
+interface NewConnection {
+  query: (sql: string, done: (error: Error | null) => void) => void
+  destroy: () => void
 }

@@ -1,5 +1,11 @@
 /** Numbers of MariaDB's errors that the program acts on. */
-export const dbErrno = { duplicate: 1062, reference: 1452, referenced: 1451, check: 4025, lockWait: 1205, deadlock: 1213, snapshotConflict: 1020, statementTimeout: 1969 } as const
+export const dbErrno = {
+  duplicate: 1062, reference: 1452, referenced: 1451, check: 4025, lockWait: 1205, deadlock: 1213, snapshotConflict: 1020,
+  statementTimeout: 1969, shuttingDown: 1053, tooManyConnections: 1040, connectionKilled: 1927,
+} as const
+
+/** The database cannot do it now and may in a moment. */
+const passing: ReadonlySet<number> = new Set([dbErrno.statementTimeout, dbErrno.shuttingDown, dbErrno.tooManyConnections, dbErrno.connectionKilled])
 
 const lost = new Set(['ECONNREFUSED', 'ECONNRESET', 'PROTOCOL_CONNECTION_LOST', 'ETIMEDOUT', 'EPIPE', 'ENOTFOUND', 'PROTOCOL_SEQUENCE_TIMEOUT', 'ER_SERVER_SHUTDOWN', 'EAI_AGAIN'])
 
@@ -31,6 +37,6 @@ export const isTransient = (error: unknown): boolean => {
 export function isUnavailable(error: unknown): boolean {
   const { code, errno } = driverError(error)
   if (code !== undefined && lost.has(code)) return true
-  if (errno === dbErrno.statementTimeout || errno === 1053 || errno === 1040) return true
+  if (errno !== undefined && passing.has(errno)) return true
   return error instanceof Error && /queue limit reached|pool is closed|connection is in closed state/i.test(`${error.message} ${error.cause instanceof Error ? error.cause.message : ''}`)
 }

@@ -1,18 +1,60 @@
-import { fileURLToPath } from 'node:url'
-import { drizzle } from 'drizzle-orm/mysql2'
-import { migrate } from 'drizzle-orm/mysql2/migrator'
 import mysql from 'mysql2/promise'
+import { errnoOf } from './errors.ts'
+import { readSteps, type Step } from './migrations.ts'
 
-const folder = fileURLToPath(new URL('../../drizzle', import.meta.url))
+/** Errors of a statement whose work stands already: table, column, key, foreign key or check there; column or key gone. */
+const doneAlready = new Set([1050, 1060, 1061, 1826, 1051, 1091])
 
-/** Brings the schema up to this version. Two processes that start together take turns by a lock in the database. */
-export async function migrateDatabase(url: string): Promise<void> {
+/**
+ * Brings the schema up to this version and no further. What has run is noted statement by statement, so that a
+ * migration that was killed half-way goes on where it stopped. Two processes that start together take turns by a lock
+ * in the database. Throws an Error with a sentence when the schema is a newer version's or a migration was edited.
+ */
+export async function migrateDatabase(url: string, steps: readonly Step[] = readSteps()): Promise<void> {
   const connection = await mysql.createConnection({ uri: url, timezone: 'Z', charset: 'utf8mb4' })
   try {
-    const [rows] = await connection.query<mysql.RowDataPacket[]>("SELECT GET_LOCK(CONCAT(DATABASE(), '.migrate'), 60) AS got")
-    if (rows[0]?.['got'] !== 1) throw new Error('Another process is migrating the database and did not finish within a minute')
-    await migrate(drizzle(connection), { migrationsFolder: folder })
+    await takeTurn(connection)
+    await connection.query('CREATE TABLE IF NOT EXISTS schema_steps (migration varchar(100) NOT NULL, position int NOT NULL, digest char(64) NOT NULL, PRIMARY KEY (migration, position))')
+    const done = await readDone(connection)
+    const pending = steps.filter((step) => !done.has(keyOf(step)))
+    assertSameHistory(steps, done)
+    for (const [index, step] of pending.entries()) await run(connection, step, index === 0)
   } finally {
     await connection.end()
   }
+}
+
+const keyOf = ({ migration, position }: Pick<Step, 'migration' | 'position'>) => `${migration}/${position}`
+
+async function takeTurn(connection: mysql.Connection) {
+  const [rows] = await connection.query<mysql.RowDataPacket[]>("SELECT GET_LOCK(CONCAT(DATABASE(), '.migrate'), 60) AS got")
+  if (rows[0]?.['got'] !== 1) throw new Error('Another process is migrating the database and did not finish within a minute')
+}
+
+async function readDone(connection: mysql.Connection): Promise<Map<string, string>> {
+  const [rows] = await connection.query<mysql.RowDataPacket[]>('SELECT migration, position, digest FROM schema_steps')
+  return new Map(rows.map((row) => [keyOf({ migration: String(row['migration']), position: Number(row['position']) }), String(row['digest'])]))
+}
+
+function assertSameHistory(steps: readonly Step[], done: ReadonlyMap<string, string>) {
+  const known = new Map(steps.map((step) => [keyOf(step), step.digest]))
+  for (const [key, digest] of done) {
+    if (!known.has(key)) throw new Error(`The database has been brought up to a newer version of Mudring than this one (it knows the migration ${key.split('/')[0]}). Start that version, or restore an older backup`)
+    if (known.get(key) !== digest) throw new Error(`The migration ${key.split('/')[0]} has been edited since it ran on this database. Migrations are added, never edited; start with an empty data folder if nothing in it is to be kept`)
+  }
+}
+
+/**
+ * Runs a statement and notes it in one transaction. A statement that changes the schema commits by itself; if the
+ * process died between the two, the first statement of the next run finds its work done.
+ */
+async function run(connection: mysql.Connection, { migration, position, statement, digest }: Step, isFirst: boolean) {
+  await connection.beginTransaction()
+  try {
+    await connection.query(statement)
+  } catch (error) {
+    if (!(isFirst && doneAlready.has(errnoOf(error) ?? 0))) throw new Error(`The migration ${migration} stopped at its statement ${position + 1}`, { cause: error })
+  }
+  await connection.query('INSERT INTO schema_steps (migration, position, digest) VALUES (?, ?, ?)', [migration, position, digest])
+  await connection.commit()
 }

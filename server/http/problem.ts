@@ -1,5 +1,6 @@
 import type { ErrorRequestHandler, Request, Response } from 'express'
-import { ZodError } from 'zod'
+import type { ZodError } from 'zod'
+import type { Problem } from '../../shared/api/problem.ts'
 import { AppError, type ErrorCode } from '../../shared/errors.ts'
 import { isUnavailable } from '../db/errors.ts'
 import type { AppDeps } from './deps.ts'
@@ -33,33 +34,46 @@ const titles: Record<ErrorCode, string> = {
 }
 
 export const bodyLimitBytes = 1024 * 1024
+const secondsToWait = 2
+
+/** The one sentence for what does not exist, was deleted, or belongs to another company. */
+export const nothingHere = () => new AppError('not_found', 'There is nothing at this address')
 
 /** Answers with problem details (RFC 9457). */
-export function sendProblem(request: Request, response: Response, error: AppError): void {
-  if (response.headersSent) {
-    response.destroy()
-    return
+function sendProblem(request: Request, response: Response, problem: Omit<Problem, 'requestId'>): void {
+  response.status(problem.status).type('application/problem+json').json({ ...problem, requestId: String(request.id) } satisfies Problem)
+}
+
+function problemOf(error: AppError): Omit<Problem, 'requestId'> {
+  const { errors, ...details } = (error.details ?? {}) as { errors?: Problem['errors'] }
+  return {
+    type: `/problems/${error.code.replaceAll('_', '-')}`,
+    title: titles[error.code],
+    status: statusOf[error.code],
+    detail: error.message,
+    ...(errors ? { errors } : {}),
+    ...(Object.keys(details).length ? { details } : {}),
   }
-  const status = statusOf[error.code]
-  const retryAfter = (error.details as { retryAfterSeconds?: number } | undefined)?.retryAfterSeconds
-  if (retryAfter !== undefined) response.setHeader('Retry-After', String(retryAfter))
-  else if (error.code === 'unavailable') response.setHeader('Retry-After', '2')
-  response
-    .status(status)
-    .type('application/problem+json')
-    .json({ type: `/problems/${error.code.replaceAll('_', '-')}`, title: titles[error.code], status, detail: error.message, requestId: request.id, details: error.details })
+}
+
+function setRetryAfter(response: Response, error: AppError): void {
+  const { retryAfterSeconds } = (error.details ?? {}) as { retryAfterSeconds?: number }
+  const seconds = retryAfterSeconds ?? (error.code === 'unavailable' ? secondsToWait : undefined)
+  if (seconds !== undefined) response.setHeader('Retry-After', String(seconds))
 }
 
 /** Turns whatever went wrong into an error the product knows; undefined: it is a fault of ours. */
-export function knownError(error: unknown): AppError | undefined {
+function knownError(error: unknown): AppError | undefined {
   if (error instanceof AppError) return error
-  if (error instanceof ZodError) return invalidInput(error, 'body')
   if (isUnavailable(error)) return new AppError('unavailable', 'The database does not answer just now. Nothing is lost; try again in a moment')
-  const { type, status } = error as { type?: string; status?: number }
+  const { type, status, expose } = error as { type?: string; status?: number; expose?: boolean }
   if (type === 'entity.too.large') return new AppError('too_large', `A request carries at most ${bodyLimitBytes / 1024 / 1024} MB. Send it in smaller pieces`)
   if (type === 'entity.parse.failed') return new AppError('invalid', 'The request is not JSON that can be read')
-  if (type === 'encoding.unsupported' || type === 'charset.unsupported') return new AppError('media_type', 'Send JSON in UTF-8')
-  if (status === 400) return new AppError('invalid', 'The request cannot be read')
+  if (type === 'encoding.unsupported' || type === 'charset.unsupported') return new AppError('media_type', 'Send JSON in UTF-8, and not compressed in a way the server does not know')
+  // What Express and its parsers refuse carries `expose`; an error of ours that happens to have a status does not.
+  if (expose && status === 404) return nothingHere()
+  if (expose && status !== undefined && status >= 400 && status < 500) return new AppError('invalid', 'The request cannot be read')
+  if (error instanceof URIError) return new AppError('invalid', 'The address cannot be read')
   return undefined
 }
 
@@ -73,16 +87,20 @@ export function invalidInput(error: ZodError, where: string): AppError {
 /** The one place where an error becomes an answer. Express knows it by its four parameters. */
 export const problemHandler =
   ({ log }: Pick<AppDeps, 'log'>): ErrorRequestHandler =>
-  (error, request, response, _next) => {
+  (error: unknown, request, response, _next) => {
     const known = knownError(error)
-    if (known) return sendProblem(request, response, known)
-    log.error({ err: error, requestId: request.id, method: request.method, path: request.path }, 'unexpected error')
+    const about = { requestId: request.id, method: request.method, path: request.path }
+    if (!known) log.error({ err: error, ...about }, 'unexpected error')
+    else if (known.code === 'unavailable') log.warn({ err: error, ...about }, 'not available')
+    else if (known.code === 'forbidden') log.info({ ...about, reason: known.message }, 'forbidden')
     if (response.headersSent) {
       response.destroy()
       return
     }
-    response
-      .status(500)
-      .type('application/problem+json')
-      .json({ type: '/problems/internal', title: 'Something went wrong', status: 500, detail: 'Something went wrong on our side. Nothing was half done; try again', requestId: request.id })
+    if (!known) {
+      sendProblem(request, response, { type: '/problems/internal', title: 'Something went wrong', status: 500, detail: 'Something went wrong on our side. Try again; if it happens again, tell us the number of this request' })
+      return
+    }
+    setRetryAfter(response, known)
+    sendProblem(request, response, problemOf(known))
   }

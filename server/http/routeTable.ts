@@ -41,6 +41,8 @@ interface Shape<Params extends z.ZodType, Query extends z.ZodType, Body extends 
   readonly params: Params
   readonly query: Query
   readonly body: Body
+  /** What may leave the server: fields it does not name are left out, an answer that does not fit is a fault of ours. */
+  readonly response?: z.ZodType
 }
 
 /** One route as the server holds it, its types forgotten. */
@@ -51,6 +53,7 @@ export interface Route {
   readonly params: z.ZodType
   readonly query: z.ZodType
   readonly body: z.ZodType
+  readonly response?: z.ZodType
   readonly handle: (context: PublicContext & { readonly member?: SignedIn }, input: RouteInput<unknown, unknown, unknown>) => Promise<unknown>
 }
 

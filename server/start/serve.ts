@@ -1,13 +1,13 @@
 import { createServer, type Server } from 'node:http'
-import pino, { type Logger } from 'pino'
 import { createApp } from '../app.ts'
 import { durabilityFaults } from '../db/assertDurable.ts'
 import { openDatabase, type Database } from '../db/client.ts'
 import { migrateDatabase } from '../db/migrate.ts'
 import { loadDemo } from '../demo/loadDemo.ts'
 import type { AppDeps } from '../http/deps.ts'
-import { isFree, startMariadb } from './mariadb.ts'
-import { ensureInstalled } from './installed.ts'
+import { createLogger } from '../http/logger.ts'
+import { databaseOf, type DatabaseHere } from './ownDatabase.ts'
+import { assertPortFree } from './ports.ts'
 import type { Settings } from './settings.ts'
 
 export interface Serving {
@@ -17,41 +17,39 @@ export interface Serving {
   readonly databaseGone: Promise<void>
 }
 
+/** bcrypt's work factor: about a third of a second a try, on another thread than the one that answers. */
+const bcryptCost = 12
+
 /** Everything behind the address: database, migration, demo company, application. Throws an Error with a sentence. */
-export async function serve(settings: Settings, options: { clientFolder: string | null; say: (line: string) => void; log?: Logger }): Promise<Serving> {
-  const { say } = options
-  if (!(await isFree(settings.port))) throw new Error(`Port ${settings.port} is in use. Set PORT to another, for instance PORT=${settings.port + 1} npm start`)
-  const log = options.log ?? pino({ level: process.env['LOG_LEVEL'] ?? 'warn' })
-  const running = settings.databaseUrl === undefined ? await startOwn(settings, say) : undefined
-  const url = settings.databaseUrl ?? running!.url
+export async function serve(settings: Settings, options: { readonly clientFolder: string | null; readonly say: (line: string) => void }): Promise<Serving> {
+  await assertPortFree(settings.port)
   const closing = new AbortController()
+  let here: DatabaseHere | undefined
   let database: Database | undefined
   let server: Server | undefined
   const stop = async () => {
     closing.abort()
     if (server) await closeServer(server)
     await database?.close()
-    await running?.stop()
+    await here?.stop()
   }
   try {
-    await migrateDatabase(url)
-    database = openDatabase(url)
+    here = await databaseOf(settings, options.say)
+    await migrateDatabase(here.migrationUrl)
+    database = openDatabase(here.url)
     const faults = await durabilityFaults(database.db)
-    if (faults.length) throw new Error(`The database would not keep what it acknowledged: ${faults.join('; ')}`)
-    const deps: AppDeps = { db: database.db, log, sessionSecret: settings.sessionSecret, secure: settings.secure, clientFolder: options.clientFolder, bcryptCost: 12, closing: closing.signal }
-    await loadDemo(deps, say)
+    if (faults.length) throw new Error(`The database would not keep what it acknowledged: ${faults.join('; ')}. Mudring does not serve on such a database`)
+    const deps: AppDeps = {
+      db: database.db, log: createLogger(settings.logLevel), sessionSecret: settings.sessionSecret, secure: settings.secure,
+      clientFolder: options.clientFolder, bcryptCost, closing: closing.signal,
+    }
+    await loadDemo(deps, options.say)
     server = await listen(createServer({ requestTimeout: 60_000, headersTimeout: 10_000 }, createApp(deps)), settings.port)
+    return { address: `http://127.0.0.1:${settings.port}`, stop, databaseGone: here.gone }
   } catch (error) {
     await stop()
     throw error
   }
-  const databaseGone = running ? new Promise<void>((gone) => running.process.once('exit', () => !closing.signal.aborted && gone())) : new Promise<void>(() => undefined)
-  return { address: `http://127.0.0.1:${settings.port}`, stop, databaseGone }
-}
-
-async function startOwn(settings: Settings, say: (line: string) => void) {
-  ensureInstalled([{ package: 'mariadb-server', program: 'mariadbd' }], say)
-  return startMariadb(settings.dataFolder)
 }
 
 const listen = (server: Server, port: number) =>

@@ -1,5 +1,7 @@
 import { demoSignIns } from '../demo/demoCompany.ts'
 import { buildClientIfStale, clientFolder } from './buildClient.ts'
+import { failStart } from './failStart.ts'
+import { assertPortFree } from './ports.ts'
 import { serve } from './serve.ts'
 import { readSettings } from './settings.ts'
 import { untilStopped } from './untilStopped.ts'
@@ -8,12 +10,11 @@ const say = (line: string) => console.log(line)
 
 try {
   const settings = readSettings()
+  await assertPortFree(settings.port)
   await buildClientIfStale(say)
   const { address, stop, databaseGone } = await serve(settings, { clientFolder, say })
-  say(`\nMudring is at ${address}\n\n${demoSignIns()}\n\nStop with Ctrl-C. Data is kept in ${settings.dataFolder}`)
+  say(`\nMudring is at ${address}\n\n${demoSignIns()}\n\nStop with Ctrl-C. ${settings.database ? 'Data is kept in the database of DATABASE_URL' : `Data is kept in ${settings.dataFolder}`}`)
   await untilStopped(stop, databaseGone, say)
 } catch (error) {
-  console.error(error instanceof Error ? error.message : error)
-  if (process.env['LOG_LEVEL'] === 'debug') console.error(error)
-  process.exit(1)
+  failStart(error)
 }

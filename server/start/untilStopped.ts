@@ -1,11 +1,25 @@
-/** Waits for Ctrl-C or SIGTERM, then stops everything in order. A second signal ends the process at once. */
-export async function untilStopped(stop: () => Promise<void>, gone: Promise<void>, say: (line: string) => void): Promise<void> {
+/** npm passes Ctrl-C on to a process that the terminal has told already: what comes within this time is one wish. */
+const sameWishMs = 2000
+
+/** Waits for Ctrl-C, SIGTERM or a closed terminal, then stops everything in order. Asked again later, it ends at once. */
+export async function untilStopped(stop: () => Promise<void>, gone: Promise<void>, say: (line: string) => void): Promise<never> {
+  let askedAt: number | undefined
   const signal = new Promise<string>((received) => {
-    for (const name of ['SIGINT', 'SIGTERM'] as const) process.once(name, () => received(name))
+    for (const name of ['SIGINT', 'SIGTERM', 'SIGHUP'] as const)
+      process.on(name, () => {
+        askedAt ??= Date.now()
+        if (Date.now() - askedAt > sameWishMs) process.exit(130)
+        received(name)
+      })
+    // A fault nobody caught: what was acknowledged is kept; the database is stopped in order all the same.
+    process.once('uncaughtException', (error) => {
+      console.error(error)
+      received('a fault')
+    })
   })
   const reason = await Promise.race([signal, gone.then(() => 'the database has stopped')])
-  process.once('SIGINT', () => process.exit(130))
-  say(reason.startsWith('SIG') ? 'Stopping' : `Stopping, because ${reason}`)
+  const wanted = reason.startsWith('SIG')
+  say(wanted ? 'Stopping' : `Stopping, because of ${reason === 'a fault' ? 'a fault in the program' : 'the database: it has stopped by itself'}`)
   await stop()
-  process.exit(reason.startsWith('SIG') ? 0 : 1)
+  process.exit(wanted ? 0 : 1)
 }

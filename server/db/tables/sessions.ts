@@ -15,9 +15,9 @@ export const sessions = mysqlTable(
   (table) => [index('sessions_member').on(table.companyId, table.memberId), index('sessions_idle').on(table.idleUntil)],
 )
 
-/** Failed sign-ins within a window, by e-mail or by address of the caller. */
+/** Attempts to sign in within a window, by a hash of who tries; a success takes its own back. */
 export const signInAttempts = mysqlTable('sign_in_attempts', {
   subject: varchar('subject', { length: 80 }).primaryKey(),
-  failures: int('failures').notNull(),
+  attempts: int('attempts').notNull(),
   windowEnds: bigint('window_ends', { mode: 'number' }).notNull(),
 })

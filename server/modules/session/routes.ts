@@ -3,6 +3,7 @@ import { signInSchema, type SessionAnswer } from '../../../shared/api/session.ts
 import { AppError } from '../../../shared/errors.ts'
 import { actionsOf } from '../../../shared/policy.ts'
 import { answered, definePublicRoute, defineRoute, noInput, type PublicContext, type SignedIn } from '../../http/routeTable.ts'
+import { sessionCookieName, sessionCookieOptions } from '../../http/sessionCookie.ts'
 import { readCompany } from '../company/companyRepo.ts'
 import { signIn } from './signIn.ts'
 
@@ -35,9 +36,9 @@ export const sessionRoutes = [
     params: noInput,
     query: noInput,
     body: z.unknown(),
-    handle: async ({ request, response }) => {
+    handle: async ({ deps, request, response }) => {
       await new Promise<void>((done, fail) => request.session.destroy((error: unknown) => (error ? fail(asError(error)) : done())))
-      response.clearCookie(response.req.secure ? '__Host-mudring' : 'mudring', { path: '/' })
+      response.clearCookie(sessionCookieName(deps), sessionCookieOptions(deps))
       response.status(204).end()
       return answered
     },

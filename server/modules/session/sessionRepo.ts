@@ -31,7 +31,8 @@ export async function deleteEndedSessions(db: Session, now: number): Promise<voi
 /** Who an address belongs to, for signing in: the only query that is not scoped by a company, since it finds the company. */
 export async function findByEmail(db: Session, email: string) {
   const [row] = await db.select().from(members).where(eq(members.email, email))
-  return row
+  // The column's collation takes é for e, so that nobody can add a look-alike; signing in takes the address as it is written.
+  return row?.email === email ? row : undefined
 }
 
 /** The member of a session with the company; undefined when disabled or gone. */
@@ -44,18 +45,30 @@ export async function readSignedIn(db: Session, companyId: string, memberId: str
 }
 
 
-/** Failures of these subjects within their windows that have not ended. */
-export async function readFailures(db: Session, subject: string, now: number): Promise<{ failures: number; windowEnds: number }> {
-  const [row] = await db.select().from(signInAttempts).where(eq(signInAttempts.subject, subject))
-  return row && row.windowEnds > now ? row : { failures: 0, windowEnds: 0 }
+/** One who tries, by what: the table of attempts names nobody, so this is a hash. */
+export interface AttemptCount {
+  readonly attempts: number
+  readonly windowEnds: number
 }
-/** Counts one failure; a window that has ended begins anew. One statement, so that two failures at once count two. */
-export async function countFailure(db: Session, subject: string, now: number, windowMs: number): Promise<void> {
+
+/**
+ * Counts an attempt before it is made and tells how many that makes within the window; one that has ended begins anew.
+ * Counting is one statement, so that a burst of attempts at once cannot slip through between reading and writing.
+ */
+export async function takeAttempt(db: Session, subject: string, now: number, windowMs: number): Promise<AttemptCount> {
+  const hasEnded = sql`${signInAttempts.windowEnds} <= ${now}`
   await db
     .insert(signInAttempts)
-    .values({ subject, failures: 1, windowEnds: now + windowMs })
-    .onDuplicateKeyUpdate({ set: { failures: sql`if(${signInAttempts.windowEnds} <= ${now}, 1, ${signInAttempts.failures} + 1)`, windowEnds: sql`if(${signInAttempts.windowEnds} <= ${now}, ${now + windowMs}, ${signInAttempts.windowEnds})` } })
+    .values({ subject, attempts: 1, windowEnds: now + windowMs })
+    // MariaDB assigns from left to right: the count is decided before the window moves.
+    .onDuplicateKeyUpdate({ set: { attempts: sql`if(${hasEnded}, 1, ${signInAttempts.attempts} + 1)`, windowEnds: sql`if(${hasEnded}, ${now + windowMs}, ${signInAttempts.windowEnds})` } })
+  const [row] = await db.select().from(signInAttempts).where(eq(signInAttempts.subject, subject))
+  return row ?? { attempts: 1, windowEnds: now + windowMs }
 }
-export async function clearFailures(db: Session, subject: string): Promise<void> {
+/** Gives one attempt back: it fitted. */
+export async function giveBackAttempt(db: Session, subject: string): Promise<void> {
+  await db.update(signInAttempts).set({ attempts: sql`greatest(${signInAttempts.attempts} - 1, 0)` }).where(eq(signInAttempts.subject, subject))
+}
+export async function clearAttempts(db: Session, subject: string): Promise<void> {
   await db.delete(signInAttempts).where(eq(signInAttempts.subject, subject))
 }
