@@ -1,6 +1,6 @@
 /** Numbers of MariaDB's errors that the program acts on. */
 export const dbErrno = {
-  duplicate: 1062, reference: 1452, referenced: 1451, check: 4025, lockWait: 1205, deadlock: 1213, snapshotConflict: 1020,
+  duplicate: 1062, reference: 1452, referenced: 1451, check: 4025, tooLong: 1406, outOfRange: 1264, lockWait: 1205, deadlock: 1213, snapshotConflict: 1020,
   statementTimeout: 1969, shuttingDown: 1053, tooManyConnections: 1040, connectionKilled: 1927,
 } as const
 
@@ -32,6 +32,10 @@ export const isTransient = (error: unknown): boolean => {
   const errno = errnoOf(error)
   return errno === dbErrno.deadlock || errno === dbErrno.lockWait || errno === dbErrno.snapshotConflict
 }
+
+const wall: ReadonlySet<number> = new Set([dbErrno.duplicate, dbErrno.reference, dbErrno.referenced, dbErrno.check, dbErrno.tooLong, dbErrno.outOfRange])
+/** Whether a row did not fit the tables' own rules; doing the same again will not work. */
+export const isRefusedByTables = (error: unknown): boolean => wall.has(errnoOf(error) ?? 0)
 
 /** Whether the database could not be reached or did not answer in time. */
 export function isUnavailable(error: unknown): boolean {

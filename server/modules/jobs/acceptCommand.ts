@@ -4,6 +4,7 @@ import type { JobDocument } from '../../../shared/model/jobDocument.ts'
 import type { Change } from '../../../shared/sync/change.ts'
 import { replay } from '../../../shared/sync/replay.ts'
 import type { Tx } from '../../db/client.ts'
+import { isRefusedByTables } from '../../db/errors.ts'
 import { inTransaction } from '../../db/transaction.ts'
 import { isSameCommand, reused } from './commandIdentity.ts'
 import { loadJob, writeChange, type JobScope } from './documentRepo.ts'
@@ -20,7 +21,7 @@ export type Outcome = { readonly version: number } | { readonly refusal: AppErro
  * ran. Only after the commit is the document kept and are others told.
  */
 export async function acceptCommand(context: JobsContext, actor: Actor, scope: JobScope, command: Command, foreign: ForeignReader): Promise<Outcome> {
-  const { outcome, doc, written } = await inTransaction(context.db, (tx) => decide(context, tx, actor, scope, command, foreign))
+  const { outcome, doc, written } = await inTransaction(context.db, (tx) => decide(context, tx, actor, scope, command, foreign)).catch((error: unknown) => refusedByTables(context, command, error))
   if (doc) context.documents.keep(scope, doc)
   if (written && doc) context.feed.announce(scope, doc.version)
   return outcome
@@ -54,6 +55,16 @@ async function decide(context: JobsContext, tx: Tx, actor: Actor, scope: JobScop
   })
   await setVersion(tx, scope, next.version)
   return { outcome: { version: next.version }, doc: next, written: true }
+}
+
+/**
+ * The tables are the second wall: what only they refuse is a fault of ours, which is reported. Sent again it would be
+ * refused again, so it is a refusal and not an error, which would hold up the queue behind it for ever.
+ */
+function refusedByTables(context: JobsContext, command: Command, error: unknown): Decision {
+  if (!isRefusedByTables(error)) throw error
+  context.report(error, { commandId: command.id, verb: command.verb })
+  return { outcome: { refusal: new AppError('refused', 'That does not fit what the database holds. Nothing was changed; load the job again') } }
 }
 
 /** A fault in a verb refuses that command, so that it cannot block the queue behind it; it is reported all the same. */
