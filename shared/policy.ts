@@ -5,6 +5,7 @@ export type Role = (typeof roles)[number]
 /** Everything the product can be asked to do. Routes and changes both name one of these. */
 export const actions = [
   'session.read',
+  'session.update',
   'company.read',
   'company.update',
   'member.read',
@@ -30,6 +31,7 @@ export type Action = (typeof actions)[number]
  */
 export const policy: Record<Action, Record<Role, boolean>> = {
   'session.read': { owner: true, office: true, designer: true, lead: true, technician: true },
+  'session.update': { owner: true, office: true, designer: true, lead: true, technician: true },
   'company.read': { owner: true, office: true, designer: true, lead: true, technician: true },
   'company.update': { owner: true, office: true, designer: false, lead: false, technician: false },
   'member.read': { owner: true, office: true, designer: true, lead: true, technician: false },

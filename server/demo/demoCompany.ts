@@ -57,5 +57,5 @@ export const demoCompanies: readonly DemoCompany[] = [
 /** The demo sign-ins, as the start command prints them. */
 export function demoSignIns(): string {
   const lines = demoCompanies.flatMap((company) => [company.name, ...company.members.map((each) => `  ${each.role.padEnd(11)} ${each.email}`)])
-  return [`Demo sign-ins, all with the passphrase "${demoPassphrase}":`, ...lines].join('\n')
+  return [`Demo sign-ins, for looking round only, all with the passphrase "${demoPassphrase}":`, ...lines].join('\n')
 }

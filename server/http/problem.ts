@@ -97,6 +97,8 @@ export const problemHandler =
       response.destroy()
       return
     }
+    // What was to be a file is now a refusal.
+    response.removeHeader('Content-Disposition')
     if (!known) {
       sendProblem(request, response, { type: '/problems/internal', title: 'Something went wrong', status: 500, detail: 'Something went wrong on our side. Try again; if it happens again, tell us the number of this request' })
       return

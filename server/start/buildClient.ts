@@ -21,18 +21,20 @@ export async function buildClientIfStale(say: (line: string) => void): Promise<v
     // In a process of its own: the tool's memory is not kept by the server that starts next.
     await promisify(execFile)(process.execPath, [join(projectFolder, 'node_modules/vite/bin/vite.js'), 'build', '--outDir', draft, '--emptyOutDir', '--logLevel', 'warn'], {
       cwd: projectFolder,
-      env: { ...process.env, NODE_ENV: 'production' },
+      env: { ...process.env, NODE_ENV: 'production', NO_COLOR: '1' },
       maxBuffer: 16 * 1024 * 1024,
     })
     writeFileSync(join(draft, '.built-from'), digest)
     putInPlace(draft, digest)
   } catch (error) {
     const { stderr, stdout } = error as { stderr?: string; stdout?: string }
-    throw new Error(`The client could not be built:\n${stderr || stdout || String(error)}`, { cause: error })
+    throw new Error(`The client could not be built:\n${firstLines(stderr || stdout || String(error))}`)
   } finally {
     rmSync(draft, { recursive: true, force: true })
   }
 }
+
+const firstLines = (text: string) => text.split('\n').slice(0, 20).join('\n')
 
 function putInPlace(draft: string, digest: string) {
   rmSync(clientFolder, { recursive: true, force: true })

@@ -35,6 +35,10 @@ export async function findByEmail(db: Session, email: string) {
   return row?.email === email ? row : undefined
 }
 
+export async function writePassphraseHash(db: Session, companyId: string, memberId: string, passphraseHash: string): Promise<void> {
+  await db.update(members).set({ passphraseHash }).where(and(eq(members.companyId, companyId), eq(members.id, memberId)))
+}
+
 /** The member of a session with the company; undefined when disabled or gone. */
 export async function readSignedIn(db: Session, companyId: string, memberId: string) {
   const [row] = await db
