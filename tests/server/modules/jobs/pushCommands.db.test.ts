@@ -209,6 +209,22 @@ describe('many at once', () => {
   })
 })
 
+describe('a long time away', () => {
+  it('is caught up in pieces: an answer holds 1,000 entries, and says that there is more', async () => {
+    const id = await startJob(designer)
+    const edits = Array.from({ length: 1010 }, (_, i) => command({ verb: 'run.update', args: { ids: ['r1'], set: { slackAMm: i } } }, 1))
+    for (const from of [0, 500, 1000]) expect((await push(designer, id, edits.slice(from, from + 500), from + 1)).refused).toEqual([])
+    const first = await changesSince(designer, id, 0)
+    expect([first.version, first.since.length, first.since.at(-1)?.version]).toEqual([1011, 1000, 1000])
+    const rest = await changesSince(designer, id, 1000)
+    expect([rest.version, rest.since.length]).toEqual([1011, 11])
+    expect(await changesSince(designer, id, 1011)).toEqual({ version: 1011, since: [] })
+    expect((await designer.get(`/api/jobs/${id}/changes?since=1012`)).status).toBe(409)
+    // What was queued long ago conflicts with none of it, because it is one's own.
+    expect((await push(designer, id, [command({ verb: 'run.update', args: { ids: ['r1'], set: { slackAMm: 5 } } }, 1)], 1011)).refused).toEqual([])
+  })
+})
+
 describe('a conflict', () => {
   it('is refused with both values, who wrote the other and when; another field is merged', async () => {
     const id = await startJob(designer)
