@@ -56,6 +56,8 @@ export const useJobStore = defineStore('job', () => {
   let waitMs = firstWaitMs
   let known = 0
 
+  const now = () => context?.now?.() ?? new Date().toISOString()
+  const changeOf = (id: string) => changes.get(id)
   const derived = shallowRef<Derived>()
   watch(shown, (doc) => status.value !== 'closed' && (derived.value = deriveJob(doc, derived.value)), { flush: 'sync' })
   const job = computed(() => jobOf(shown.value))
@@ -105,9 +107,6 @@ export const useJobStore = defineStore('job', () => {
   function newId(): string {
     return context?.newId?.() ?? crypto.randomUUID()
   }
-  const now = () => context?.now?.() ?? new Date().toISOString()
-  const changeOf = (id: string) => changes.get(id)
-
   /** The one door for every edit. Refused: a sentence in `notice`, and nothing has changed. Returns the command's id. */
   function edit(intent: Intent): string | undefined {
     const words = safely(() => describe(shown.value, intent)) ?? intent.verb
