@@ -50,6 +50,8 @@ export const useJobStore = defineStore('job', () => {
   const isOffline = ref(false)
   const history = useJobHistory()
   const changes = new Map<string, Change>()
+  /** What each command was called when it was made: its words need the job as it then was. */
+  const wordsOf = new Map<string, string>()
   let context: OpenWith | undefined
   let syncing: Promise<void> | undefined
   let retry: ReturnType<typeof setTimeout> | undefined
@@ -101,6 +103,7 @@ export const useJobStore = defineStore('job', () => {
     history.done.value = []
     history.undone.value = []
     changes.clear()
+    wordsOf.clear()
     derived.value = undefined
   }
 
@@ -111,7 +114,9 @@ export const useJobStore = defineStore('job', () => {
   function edit(intent: Intent): string | undefined {
     const words = safely(() => describe(shown.value, intent)) ?? intent.verb
     const id = dispatch(intent)
-    if (id) history.record({ commandId: id, words })
+    if (!id) return undefined
+    wordsOf.set(id, words)
+    history.record({ commandId: id, words })
     return id
   }
   function undo() {
@@ -183,7 +188,7 @@ export const useJobStore = defineStore('job', () => {
       if (!command) continue
       history.forget(commandId)
       changes.delete(commandId)
-      refused.value = [...refused.value, { command, words: safely(() => describe(before, command)) ?? command.verb, message, conflict: code === 'conflict' && isConflict(details) ? details : null }]
+      refused.value = [...refused.value, { command, words: wordsOf.get(commandId) ?? safely(() => describe(before, command)) ?? command.verb, message, conflict: code === 'conflict' && isConflict(details) ? details : null }]
     }
     const settled = new Set([...answer.accepted.map((each) => each.commandId), ...answer.refused.map((each) => each.commandId)])
     outbox.value = outbox.value.filter((command) => !settled.has(command.id))
