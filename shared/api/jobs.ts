@@ -20,8 +20,8 @@ export const jobParamsSchema = z.strictObject({ jobId: idSchema })
 export const createJobSchema = z.strictObject({
   id: idSchema,
   name: jobSchema.shape.name,
-  client: jobSchema.shape.client,
-  address: jobSchema.shape.address,
+  client: jobSchema.shape.client.default(''),
+  address: jobSchema.shape.address.default(''),
   lengthUnit: jobSchema.shape.lengthUnit.optional(),
   conductorUnit: jobSchema.shape.conductorUnit.optional(),
 })

@@ -25,7 +25,7 @@ export const jobSchema = workingRulesSchema.extend({
   kind: z.literal('job'),
   id: idSchema,
   name: nameSchema,
-  client: z.string().trim().max(80).default(''),
-  address: z.string().trim().max(160).default(''),
+  client: z.string().trim().max(80),
+  address: z.string().trim().max(160),
 })
 export type Job = z.infer<typeof jobSchema>

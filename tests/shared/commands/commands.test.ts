@@ -4,7 +4,7 @@ import { find, jobOf } from '../../../shared/model/jobDocument.ts'
 import { removalOf } from '../../../shared/commands/items.ts'
 import { apply } from '../../../shared/sync/change.ts'
 import { assertSound } from '../../../shared/sync/soundness.ts'
-import { buildDoc, buildLevel, buildPathway, buildPlate, buildRoom, buildRun, smallHouse } from '../../support/build.ts'
+import { buildDoc, buildJob, buildLevel, buildPathway, buildPlate, buildRoom, buildRun, smallHouse } from '../../support/build.ts'
 import { asDesigner, checkCommand } from '../../support/checkCommand.ts'
 
 const house = () => buildDoc(...smallHouse())
@@ -157,6 +157,12 @@ describe('bad arguments', () => {
 })
 
 describe('job.update', () => {
+  it('leaves the client and the address of a job whose units change', () => {
+    const doc = buildDoc(buildJob({ client: 'A client', address: '4 Long Lane' }))
+    const { after, change } = checkCommand(doc, { verb: 'job.update', args: { set: { lengthUnit: 'm' } } })
+    expect(Object.keys(change.updated[0]!.fields)).toEqual(['lengthUnit'])
+    expect(jobOf(after)).toMatchObject({ client: 'A client', address: '4 Long Lane', lengthUnit: 'm' })
+  })
   it('changes limits and leaves the rest', () => {
     const doc = house()
     const limits = { ...jobOf(doc).limits, speakerLossConvention: 'impedance' as const, speakerLossCaution: 5, speakerLossStop: 10 }
