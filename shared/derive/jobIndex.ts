@@ -1,6 +1,7 @@
 import type { JobDocument } from '../model/jobDocument.ts'
-import { fieldKinds, kinds, type JobRecord } from '../model/record.ts'
+import { fieldKinds, kinds, type JobRecord, type Kind } from '../model/record.ts'
 import type { CordEnd, RunEnd } from '../model/run.ts'
+import { Source } from './cells.ts'
 
 /** Where an end is, as a key: every run or cord there is found under it. */
 export function endKey(end: RunEnd | CordEnd): string {
@@ -59,44 +60,82 @@ export function* differences(before: JobDocument | undefined, after: JobDocument
   }
 }
 
-/** Records by the questions they answer, kept up to date edit by edit. */
-export class JobIndex {
-  private readonly found = new Map<string, Map<string, JobRecord>>()
+/** What answers one question, and who asked it. */
+class Answer extends Source {
+  readonly records = new Map<string, JobRecord>()
+  private inOrder: readonly JobRecord[] | undefined
 
-  /** Takes a difference in and tells every key that it touched. */
-  take(doc: JobDocument, { before, after }: Difference, touch: (key: string) => void): void {
-    if (before) {
-      touch(`${before.kind}:${before.id}`)
-      for (const key of indexKeysOf(doc, before)) {
-        if (before.kind !== 'strike') this.found.get(key)?.delete(before.id)
-        touch(key)
-      }
-    }
-    if (after) {
-      touch(`${after.kind}:${after.id}`)
-      for (const key of indexKeysOf(doc, after)) {
-        if (after.kind !== 'strike') {
-          let at = this.found.get(key)
-          if (!at) this.found.set(key, (at = new Map()))
-          at.set(after.id, after)
-        }
-        touch(key)
-      }
-    }
-    touch(`all ${(after ?? before)!.kind}`)
+  put(record: JobRecord): void {
+    this.records.set(record.id, record)
+    this.inOrder = undefined
+  }
+  remove(id: string): void {
+    this.records.delete(id)
+    this.inOrder = undefined
+  }
+  get list(): readonly JobRecord[] {
+    return (this.inOrder ??= settled([...this.records.values()]))
+  }
+}
+
+const nothing: readonly JobRecord[] = []
+
+/** Records by their place and by the questions they answer, kept up to date edit by edit, each with who read it. */
+export class JobIndex {
+  private readonly places = new Map<Kind, Map<string, Source>>()
+  private readonly wholes = new Map<Kind, Source>()
+  private readonly answers = new Map<string, Answer>()
+
+  /** Takes a difference in and tells everything that it touched. */
+  take(doc: JobDocument, { before, after }: Difference, touch: (source: Source) => void): void {
+    const { kind, id } = (after ?? before)!
+    const place = this.places.get(kind)?.get(id)
+    if (place) touch(place)
+    const whole = this.wholes.get(kind)
+    if (whole) touch(whole)
+    if (before) for (const key of indexKeysOf(doc, before)) touch(this.changed(key, kind, (answer) => answer.remove(id)))
+    if (after) for (const key of indexKeysOf(doc, after)) touch(this.changed(key, kind, (answer) => answer.put(after)))
+  }
+
+  /** A strike is not an answer itself: it touches the answers that hold what it strikes. */
+  private changed(key: string, kind: Kind, change: (answer: Answer) => void): Answer {
+    const answer = this.answer(key)
+    if (kind !== 'strike') change(answer)
+    return answer
+  }
+
+  private answer(key: string): Answer {
+    let answer = this.answers.get(key)
+    if (!answer) this.answers.set(key, (answer = new Answer()))
+    return answer
+  }
+
+  /** Where a record is or would be. */
+  place(kind: Kind, id: string): Source {
+    let places = this.places.get(kind)
+    if (!places) this.places.set(kind, (places = new Map<string, Source>()))
+    let place = places.get(id)
+    if (!place) places.set(id, (place = new Source()))
+    return place
+  }
+
+  /** All records of a kind, as a whole. */
+  whole(kind: Kind): Source {
+    let whole = this.wholes.get(kind)
+    if (!whole) this.wholes.set(kind, (whole = new Source()))
+    return whole
   }
 
   /**
    * The records that answer a question. What people said comes in the order they said it; everything else in an order
    * that does not depend on how the job came to be as it is.
    */
-  get<R extends JobRecord>(key: string): R[] {
-    const at = this.found.get(key)
-    if (!at || at.size === 0) return []
-    const records = [...at.values()] as R[]
-    return records.length === 1 || fieldKinds.has(records[0]!.kind) ? records : records.sort(settledOrder)
+  ask<R extends JobRecord>(key: string, note: (source: Source) => void): readonly R[] {
+    const answer = this.answer(key)
+    note(answer)
+    return (answer.records.size ? answer.list : nothing) as readonly R[]
   }
 }
 
-
+const settled = (records: JobRecord[]): readonly JobRecord[] => (records.length === 1 || fieldKinds.has(records[0]!.kind) ? records : records.sort(settledOrder))
 const settledOrder = (a: JobRecord, b: JobRecord): number => (a.kind === 'run' && b.kind === 'run' ? a.serial - b.serial : a.id < b.id ? -1 : 1)

@@ -1,7 +1,7 @@
 import type { Job } from '../model/job.ts'
 import type { JobDocument } from '../model/jobDocument.ts'
 import type { JobRecord, Kind, RecordOf } from '../model/record.ts'
-import type { Cells } from './cells.ts'
+import type { Cells, Source } from './cells.ts'
 import type { JobIndex } from './jobIndex.ts'
 
 /**
@@ -17,16 +17,17 @@ export interface JobReader {
   readonly all: <K extends Kind>(kind: K) => readonly RecordOf<K>[]
   /** The records under a key of the index. */
   readonly under: <R extends JobRecord>(key: string) => readonly R[]
-  /** A result remembered under a name. */
-  readonly remember: <T>(name: string, work: () => T) => T
+  /** A result remembered under a name: what it is, and of which record. */
+  readonly remember: <T>(what: string, id: string, work: () => T) => T
 }
 
 export function readJob(doc: JobDocument, index: JobIndex, cells: Cells): JobReader {
   const find = <K extends Kind>(kind: K, id: string | null | undefined): RecordOf<K> | undefined => {
     if (!id) return undefined
-    cells.note(`${kind}:${id}`)
+    cells.note(index.place(kind, id))
     return (doc.records[kind] as ReadonlyMap<string, RecordOf<K>>).get(id)
   }
+  const note = (source: Source) => cells.note(source)
   return {
     doc,
     find,
@@ -36,13 +37,10 @@ export function readJob(doc: JobDocument, index: JobIndex, cells: Cells): JobRea
       return job
     },
     all: (kind) => {
-      cells.note(`all ${kind}`)
+      cells.note(index.whole(kind))
       return [...doc.records[kind].values()] as RecordOf<typeof kind>[]
     },
-    under: (key) => {
-      cells.note(key)
-      return index.get(key)
-    },
-    remember: (name, work) => cells.get(name, work),
+    under: (key) => index.ask(key, note),
+    remember: (what, id, work) => cells.get(what, id, work),
   }
 }

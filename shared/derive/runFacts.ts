@@ -15,7 +15,7 @@ export interface BareFacts {
 
 /** Stage, length and loudspeaker figures of a run, worked out once. */
 export const factsOf = (reader: JobReader, run: Run): BareFacts =>
-  reader.remember(`bare run:${run.id}`, () => {
+  reader.remember('bare', run.id, () => {
     // The run is read by its id, so that an edit to it is noticed here too.
     const current = reader.find('run', run.id) ?? run
     const said = saidOf(reader, run.id)
