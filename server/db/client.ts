@@ -14,8 +14,11 @@ export interface Database {
   readonly close: () => Promise<void>
 }
 
-/** Opens a pool on a MariaDB. Moments travel in UTC; no caller and no statement waits for ever. */
-export function openDatabase(url: string, connectionLimit = 10): Database {
+/**
+ * Opens a pool on a MariaDB. Moments travel in UTC; no caller and no statement waits for ever. `onStatement` hears of
+ * each statement without its values.
+ */
+export function openDatabase(url: string, connectionLimit = 10, onStatement?: (statement: string) => void): Database {
   const pool = mysql.createPool({
     uri: url,
     connectionLimit,
@@ -35,7 +38,8 @@ export function openDatabase(url: string, connectionLimit = 10): Database {
     connection.query(`SET SESSION ${settings}`, (error) => error && connection.destroy())
   })
   const guarded = withDeadlines(pool, { connectionMs: connectionDeadlineMs, statementMs: statementDeadlineMs })
-  return { pool: guarded, db: drizzle(guarded), close: () => pool.end() }
+  const logger = onStatement ? { logQuery: onStatement } : false
+  return { pool: guarded, db: drizzle(guarded, { logger }), close: () => pool.end() }
 }
 
 /** As the pool hands it over: the driver's own kind, with callbacks. */

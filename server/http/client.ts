@@ -1,14 +1,17 @@
-import { extname, join } from 'node:path'
+import { join } from 'node:path'
 import express, { type Express, type RequestHandler } from 'express'
+
+const reads = new Set(['GET', 'HEAD'])
+const isFile = /\.[^/]*$|^\/assets\//
 
 /**
  * Serves the built client. Files under assets carry their hash in the name and never change; the rest is asked for
- * anew each time. Any other address is a page of the client, so it gets index.html; an address with an extension is a
- * file, and one that is not there is not answered with a page in its place.
+ * anew each time. Any other address is a page of the client, so it gets index.html; an address with a dot in its last
+ * part is a file, and one that is not there is not answered with a page in its place.
  */
 export function serveClient(app: Express, folder: string): void {
   const page: RequestHandler = (request, response, next) => {
-    if ((request.method !== 'GET' && request.method !== 'HEAD') || extname(request.path) !== '') return next()
+    if (!reads.has(request.method) || isFile.test(request.path)) return next()
     response.setHeader('Cache-Control', 'no-cache')
     response.sendFile(join(folder, 'index.html'))
   }

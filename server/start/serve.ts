@@ -1,3 +1,4 @@
+import { setMaxListeners } from 'node:events'
 import { createServer, type Server } from 'node:http'
 import { createApp } from '../app.ts'
 import { durabilityFaults } from '../db/assertDurable.ts'
@@ -24,6 +25,8 @@ const bcryptCost = 12
 export async function serve(settings: Settings, options: { readonly clientFolder: string | null; readonly say: (line: string) => void }): Promise<Serving> {
   await assertPortFree(settings.port)
   const closing = new AbortController()
+  // Every open stream listens for it.
+  setMaxListeners(0, closing.signal)
   let here: DatabaseHere | undefined
   let database: Database | undefined
   let server: Server | undefined

@@ -1,3 +1,4 @@
+import { setMaxListeners } from 'node:events'
 import type { Express } from 'express'
 import pino from 'pino'
 import request from 'supertest'
@@ -27,6 +28,7 @@ export async function startTestApp(changed: Partial<AppDeps> = {}): Promise<Test
   await migrateDatabase(schema.migrationUrl)
   const database = openDatabase(schema.url)
   const closing = new AbortController()
+  setMaxListeners(0, closing.signal)
   const deps: AppDeps = {
     db: database.db, log: pino({ level: 'silent' }), sessionSecret: 'a secret of the tests', secure: false, clientFolder: null,
     // Quick hashes: what is tested is not how long they take.
