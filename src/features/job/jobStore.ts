@@ -61,7 +61,7 @@ export const useJobStore = defineStore('job', () => {
   const now = () => context?.now?.() ?? new Date().toISOString()
   const changeOf = (id: string) => changes.get(id)
   const derived = shallowRef<Derived>()
-  watch(shown, (doc) => status.value !== 'closed' && (derived.value = deriveJob(doc, derived.value)), { flush: 'sync' })
+  watch(shown, (doc) => status.value === 'ready' && (derived.value = deriveJob(doc, derived.value)), { flush: 'sync' })
   const job = computed(() => jobOf(shown.value))
 
   return {
