@@ -61,7 +61,7 @@ export const useJobStore = defineStore('job', () => {
   const now = () => context?.now?.() ?? new Date().toISOString()
   const changeOf = (id: string) => changes.get(id)
   const derived = shallowRef<Derived>()
-  watch(shown, (doc) => status.value === 'ready' && (derived.value = deriveJob(doc, derived.value)), { flush: 'sync' })
+  watch(shown, (doc) => status.value === 'ready' && (derived.value = deriveJob(doc, derived.value?.doc.id === doc.id ? derived.value : undefined)), { flush: 'sync' })
   const job = computed(() => jobOf(shown.value))
 
   return {
@@ -84,7 +84,6 @@ export const useJobStore = defineStore('job', () => {
       known = opened.version
       outbox.value = (await given.disk?.load()) ?? []
       status.value = 'ready'
-      derived.value = undefined
       rebase()
       void sync()
     } catch (error) {
@@ -104,7 +103,7 @@ export const useJobStore = defineStore('job', () => {
     history.undone.value = []
     changes.clear()
     wordsOf.clear()
-    derived.value = undefined
+    // What was shown stays until another job is there: a page that is on its way out may still read it.
   }
 
   function newId(): string {
