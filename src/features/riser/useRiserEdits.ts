@@ -25,7 +25,9 @@ export function useRiserEdits(doc: ComputedRef<JobDocument>, layout: ComputedRef
     const plates = moves.flatMap(({ item, at }) => {
       const plate = item.kind === 'plate' ? find(doc.value, 'plate', item.id) : undefined
       const to = plate && roomPointAt(doc.value, layout.value, at, plate.id)
-      return plate && to ? [{ plate, to }] : []
+      const spot = layout.value.plates.find((each) => each.plate.id === item.id)
+      const from = spot ? roomPointAt(doc.value, layout.value, spot, item.id) : null
+      return plate && to ? [{ plate, to, from }] : []
     })
     const steps = moves.flatMap(({ item, at }) => otherMove(item, at))
     const plateMove = planMoves(doc.value, plates)

@@ -66,6 +66,10 @@ export function useRiserTools(doc: ComputedRef<JobDocument>, layout: ComputedRef
     if (!at || !screen || (!hasTool.value && !dragging)) hint.value = null
     else hint.value = { screen, text: room ? wordsFor(room, at, dragging) : 'Not in a room' }
   }
+  function drawnAt(plateId: string): RoomPoint | null {
+    const spot = layout.value.plates.find((each) => each.plate.id === plateId)
+    return spot ? roomPointAt(doc.value, layout.value, spot, plateId) : null
+  }
   function wordsFor(room: RoomPoint, at: XY, dragging: string | null): string {
     const record = find(doc.value, 'room', room.roomId)!
     const { lengthUnit } = jobOf(doc.value)
@@ -73,7 +77,7 @@ export function useRiserTools(doc: ComputedRef<JobDocument>, layout: ComputedRef
     if (dragging) {
       const plate = dragging.startsWith('plate:') ? find(doc.value, 'plate', dragging.slice(6)) : undefined
       if (!plate) return record.name
-      return plate.mounting === 'ceiling' ? `${record.name}, ceiling` : `${record.name}, ${height(moveTo(doc.value, plate, room).heightMm)}`
+      return plate.mounting === 'ceiling' ? `${record.name}, ceiling` : `${record.name}, ${height(moveTo(doc.value, plate, room, drawnAt(plate.id)).heightMm)}`
     }
     const { tool } = riser
     if (tool.kind === 'run') {

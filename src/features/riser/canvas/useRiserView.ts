@@ -7,7 +7,7 @@ const margin = 20
 
 /** Where one looks: fit, go to a point, zoom by a step. */
 export function useRiserView(layout: ComputedRef<RiserLayout>) {
-  const { viewport, dimensions, setViewport, zoomTo, screenToFlowCoordinate, flowToScreenCoordinate } = useVueFlow()
+  const { viewport, dimensions, setViewport, zoomTo, screenToFlowCoordinate, flowToScreenCoordinate } = useVueFlow({ id: 'riser' })
   const least = computed(() => Math.min(zoomRange.least, fitZoom()))
 
   function fitZoom(): number {

@@ -26,9 +26,9 @@ export function removalWords(doc: JobDocument, items: readonly Item[]): { summar
 }
 
 /** Plates moved together by one drag: each by as much, one command. */
-export function planMoves(doc: JobDocument, moves: readonly { readonly plate: Plate; readonly to: RoomPoint }[]): Intent | null {
-  const changed = moves.flatMap(({ plate, to }) => {
-    const place = moveTo(doc, plate, to)
+export function planMoves(doc: JobDocument, moves: readonly { readonly plate: Plate; readonly to: RoomPoint; readonly from: RoomPoint | null }[]): Intent | null {
+  const changed = moves.flatMap(({ plate, to, from }) => {
+    const place = moveTo(doc, plate, to, from)
     return isElsewhere(plate, place) ? [{ id: plate.id, to: place }] : []
   })
   return changed.length ? { verb: 'plate.move', args: { moves: changed } } : null

@@ -44,17 +44,25 @@ export function placeAt(doc: JobDocument, point: RoomPoint, mounting: Mounting, 
   return { roomId: room.id, mounting, wall, alongMm, at: null, heightMm: heightMm ?? snapHeight(point.up * ceilingMm, ceilingMm), heightTo: 'centre' }
 }
 
-/** A new place for a plate that stays what it is: on its own wall where that wall reaches the point. */
-export function moveTo(doc: JobDocument, plate: Plate, point: RoomPoint): PlatePlace {
-  const room = find(doc, 'room', point.roomId)!
-  if (plate.wall === null) return placeAt(doc, point, plate.mounting)
+/**
+ * A new place for a plate that stays what it is: on its own wall where that wall reaches the point. From where it was
+ * drawn counts as well: what was dragged only sideways keeps its height, and what was dragged only up or down its place.
+ */
+export function moveTo(doc: JobDocument, plate: Plate, to: RoomPoint, from: RoomPoint | null = null): PlatePlace {
+  const room = find(doc, 'room', to.roomId)!
+  const isHere = plate.roomId === room.id
+  const keepsAcross = isHere && from !== null && Math.abs(to.across - from.across) < 0.008
+  if (plate.wall === null) return keepsAcross && plate.at ? { ...placeAt(doc, to, plate.mounting), at: plate.at } : placeAt(doc, to, plate.mounting)
   const ceilingMm = ceilingOf(doc, room)
-  const place = placeAt(doc, point, plate.mounting)
-  const side = plate.roomId === room.id ? wallOf(room, plate.wall)?.side : undefined
+  const rise = from ? to.up - from.up : 0
+  const up = from ? plate.heightMm / ceilingMm + rise : to.up
+  const heightMm = isHere && from && Math.abs(rise) < 0.02 ? plate.heightMm : snapHeight(up * ceilingMm, ceilingMm)
+  const base = { ...placeAt(doc, to, plate.mounting), heightMm, heightTo: plate.heightTo }
+  if (keepsAcross) return { ...base, wall: plate.wall, alongMm: plate.alongMm }
+  const side = isHere ? wallOf(room, plate.wall)?.side : undefined
   const { minX, maxX } = extentOf(room)
-  const xMm = Math.round(minX + point.across * (maxX - minX))
-  const own = side === 'N' || side === 'S' ? { wall: plate.wall, alongMm: alongOf(room, plate.wall, xMm) } : null
-  return { ...place, heightMm: snapHeight(point.up * ceilingMm, ceilingMm), heightTo: plate.heightTo, ...(own && own.alongMm !== null ? { wall: own.wall, alongMm: own.alongMm } : {}) }
+  const alongMm = side === 'N' || side === 'S' ? alongOf(room, plate.wall, Math.round(minX + to.across * (maxX - minX))) : null
+  return alongMm === null ? base : { ...base, wall: plate.wall, alongMm }
 }
 
 /** The wall on a side of the room that a point lies on, and how far along it; the first wall where none does. */
