@@ -11,7 +11,7 @@ import type { Change } from '../sync/change.ts'
 /** Most commands one request may carry; a longer queue is sent in pieces. */
 export const maxCommandsPerPush = 500
 /** Most log entries one answer carries; whoever is further behind asks again from the last it got. */
-export const maxEntriesPerAnswer = 1000
+export const maxEntriesPerAnswer = 400
 
 /** GET /api/jobs/:jobId and what hangs below it. */
 export const jobParamsSchema = z.strictObject({ jobId: idSchema })

@@ -1,5 +1,5 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
-import type { PushAnswer } from '../../../../shared/api/jobs.ts'
+import { maxEntriesPerAnswer, type PushAnswer } from '../../../../shared/api/jobs.ts'
 import { verbs, type Command, type Intent } from '../../../../shared/commands/index.ts'
 import { find } from '../../../../shared/model/jobDocument.ts'
 import { apply } from '../../../../shared/sync/change.ts'
@@ -210,18 +210,20 @@ describe('many at once', () => {
 })
 
 describe('a long time away', () => {
-  it('is caught up in pieces: an answer holds 1,000 entries, and says that there is more', async () => {
+  it('is caught up in pieces: an answer holds so many entries, and says that there is more', async () => {
     const id = await startJob(designer)
-    const edits = Array.from({ length: 1010 }, (_, i) => command({ verb: 'run.update', args: { ids: ['r1'], set: { slackAMm: i } } }, 1))
-    for (const from of [0, 500, 1000]) expect((await push(designer, id, edits.slice(from, from + 500), from + 1)).refused).toEqual([])
+    const edits = Array.from({ length: maxEntriesPerAnswer + 10 }, (_, i) => command({ verb: 'run.update', args: { ids: ['r1'], set: { slackAMm: i } } }, 1))
+    const last = edits.length + 1
+    const pushed = await push(designer, id, edits, 0)
+    expect([pushed.refused, pushed.accepted.length, pushed.version, pushed.since.length]).toEqual([[], edits.length, last, maxEntriesPerAnswer])
     const first = await changesSince(designer, id, 0)
-    expect([first.version, first.since.length, first.since.at(-1)?.version]).toEqual([1011, 1000, 1000])
-    const rest = await changesSince(designer, id, 1000)
-    expect([rest.version, rest.since.length]).toEqual([1011, 11])
-    expect(await changesSince(designer, id, 1011)).toEqual({ version: 1011, since: [] })
-    expect((await designer.get(`/api/jobs/${id}/changes?since=1012`)).status).toBe(409)
+    expect([first.version, first.since.length, first.since.at(-1)?.version]).toEqual([last, maxEntriesPerAnswer, maxEntriesPerAnswer])
+    const rest = await changesSince(designer, id, maxEntriesPerAnswer)
+    expect([rest.version, rest.since.length]).toEqual([last, 11])
+    expect(await changesSince(designer, id, last)).toEqual({ version: last, since: [] })
+    expect((await designer.get(`/api/jobs/${id}/changes?since=${last + 1}`)).status).toBe(409)
     // What was queued long ago conflicts with none of it, because it is one's own.
-    expect((await push(designer, id, [command({ verb: 'run.update', args: { ids: ['r1'], set: { slackAMm: 5 } } }, 1)], 1011)).refused).toEqual([])
+    expect((await push(designer, id, [command({ verb: 'run.update', args: { ids: ['r1'], set: { slackAMm: 5 } } }, 1)], last)).refused).toEqual([])
   })
 })
 
