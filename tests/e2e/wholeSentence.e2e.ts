@@ -65,7 +65,7 @@ describe('from a wire that is too thin to a traced one', () => {
     const xlsx = join(world.folder, 'schedule.xlsx')
     await workbook.saveAs(xlsx)
     const csv = openElsewhere(xlsx)
-    const line = csv.split('\n').find((each) => each.startsWith('PAT4-S1,'))!
+    const line = csv.split('\n').find((each) => each.startsWith('"PAT4-S1",'))!
     expect(line).toContain('14/2')
     expect(csv.split('\n')[0]).toContain('Length, ft')
     const shown = await page.locator('.row', { hasText: 'PAT4-S1' }).first().locator('.length').innerText()
@@ -139,7 +139,7 @@ function openElsewhere(xlsx: string): string {
 function cellsOf(csv: string, label: string): Record<string, string> {
   const split = (line: string) => [...line.matchAll(/("(?:[^"]|"")*"|[^,]*)(?:,|$)/g)].map((match) => match[1]!.replace(/^"|"$/g, ''))
   const [head, ...rows] = csv.split('\n')
-  const values = split(rows.find((row) => row.startsWith(`${label},`))!)
+  const values = split(rows.find((row) => row.startsWith(`"${label}",`))!)
   return Object.fromEntries(split(head!).map((name, i) => [name, values[i] ?? '']))
 }
 /** Every code on every sheet, read by another program at 300 dpi. */
