@@ -16,8 +16,11 @@ import { playJob } from './playJob.ts'
 export async function loadDemo(deps: AppDeps, say: (line: string) => void): Promise<void> {
   if ((await countCompanies(deps.db)) > 0) return
   say('Loading the demo company')
-  await insertDemoCompanies(deps)
-  await playDemoJobs(deps)
+  // All of it or nothing: a start that is broken off half-way begins anew the next time.
+  await inTransaction(deps.db, async (tx) => {
+    await insertDemoCompanies({ ...deps, db: tx })
+    await playDemoJobs({ ...deps, db: tx })
+  })
 }
 
 /** The first company's jobs, told as the commands of its members. */

@@ -1,12 +1,17 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { jobFixtures } from '../../../fixtures/jobs/allJobs.ts'
 import { deriveJob } from '../../../shared/derive/deriveJob.ts'
-import { playDemoJobs } from '../../../server/demo/loadDemo.ts'
+import { migrateDatabase } from '../../../server/db/migrate.ts'
+import { loadDemo, playDemoJobs } from '../../../server/demo/loadDemo.ts'
+import { countCompanies } from '../../../server/modules/company/companyRepo.ts'
+import { listJobRows } from '../../../server/modules/jobs/jobRepo.ts'
 import type { JobList } from '../../../shared/api/jobs.ts'
 import type { JobDocument } from '../../../shared/model/jobDocument.ts'
 import { changesSince, open, type Agent } from '../../support/jobOnServer.ts'
 import { playFixture } from '../../support/playFixture.ts'
+import { breakable } from '../../support/breakableDatabase.ts'
 import { startTestApp, type TestApp } from '../../support/testApp.ts'
+import { makeSchema } from '../../support/testSchema.ts'
 
 let test: TestApp
 let designer: Agent
@@ -40,4 +45,24 @@ describe('the demo company’s jobs', () => {
       expect([job.runs, job.levels]).toEqual([doc.records.run.size, doc.records.level.size])
     }
   })
+})
+
+describe('a first start that is broken off while it loads the demo company', () => {
+  it.each([2, 400])('at statement %i leaves an empty database, and the next start loads it whole', async (statement) => {
+    const schema = await makeSchema()
+    await migrateDatabase(schema.migrationUrl)
+    const { database, breakAt, mend, broke } = breakable(schema.url)
+    const deps = { ...test.deps, db: database.db, closing: new AbortController().signal }
+    breakAt(statement)
+    await expect(loadDemo(deps, () => undefined)).rejects.toThrow()
+    expect(broke()).toBe(true)
+    mend()
+    expect(await countCompanies(database.db)).toBe(0)
+    await loadDemo(deps, () => undefined)
+    expect(await listJobRows(database.db, 'larkhook')).toHaveLength(jobFixtures.length)
+    await loadDemo(deps, () => undefined)
+    expect(await countCompanies(database.db)).toBe(2)
+    await database.close()
+    await schema.drop()
+  }, 30_000)
 })

@@ -1,6 +1,5 @@
 import { and, eq } from 'drizzle-orm'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
-import { openDatabase, type Database } from '../../../../server/db/client.ts'
 import { inTransaction } from '../../../../server/db/transaction.ts'
 import { rooms } from '../../../../server/db/tables/places.ts'
 import { createJobsContext, type JobsContext } from '../../../../server/modules/jobs/jobsContext.ts'
@@ -8,6 +7,7 @@ import { loadJob } from '../../../../server/modules/jobs/documentRepo.ts'
 import { pushCommands } from '../../../../server/modules/jobs/pushCommands.ts'
 import { readDocument } from '../../../../server/modules/jobs/readDocument.ts'
 import type { Intent } from '../../../../shared/commands/index.ts'
+import { breakable } from '../../../support/breakableDatabase.ts'
 import { buildRoom } from '../../../support/build.ts'
 import { command, open, push, startJob, type Agent } from '../../../support/jobOnServer.ts'
 import { startTestApp, type TestApp } from '../../../support/testApp.ts'
@@ -45,25 +45,6 @@ describe('a write that the tables refuse', () => {
     expect(await loaded(id)).toEqual((await open(designer, id)).doc)
   })
 })
-
-/** A database whose statements inside transactions fail from the n-th on, until it is mended. */
-function breakable(url: string): { database: Database; breakAt: (statement: number) => void; mend: () => void; broke: () => boolean } {
-  const database = openDatabase(url, 2)
-  let left = Number.POSITIVE_INFINITY
-  let broke = false
-  const take = database.pool.getConnection.bind(database.pool)
-  database.pool.getConnection = async () => {
-    const connection = await take()
-    const ask = connection.query.bind(connection) as (...args: unknown[]) => Promise<unknown>
-    connection.query = (async (...args: unknown[]) => {
-      if (--left > 0 || JSON.stringify(args[0]).includes('rollback')) return ask(...args)
-      broke = true
-      throw new Error('the disk is gone')
-    }) as typeof connection.query
-    return connection
-  }
-  return { database, breakAt: (statement) => ((left = statement), (broke = false)), mend: () => (left = Number.POSITIVE_INFINITY), broke: () => broke }
-}
 
 describe('a database that breaks at the n-th statement of a command', () => {
   const work: [string, Intent][] = [
