@@ -1,7 +1,7 @@
 import { lineLoadPercent, parallelOhm, withinLimit } from '../calc/speaker/load.ts'
 import { cordsOn, runsOn, sourceEnd } from '../derive/ends.ts'
 import type { JobReader } from '../derive/jobReader.ts'
-import { speakerLoad, type SpeakerLoad } from '../derive/speakerFacts.ts'
+import { ohmText, speakerLoad, type SpeakerLoad } from '../derive/speakerLoad.ts'
 import type { Device, DeviceModel, Terminal } from '../model/device.ts'
 import type { Run } from '../model/run.ts'
 import { formatNumber } from '../units.ts'
@@ -18,8 +18,7 @@ function fedBy(reader: JobReader, device: Device, terminal: Terminal): Fed[] {
   const ends = [at, ...cordsOn(reader, at).map(({ far }) => far)]
   return ends.flatMap((end) =>
     runsOn(reader, end).flatMap(({ run, end: name }) => {
-      const type = reader.find('cableType', run.cableTypeId)
-      const load = type && sourceEnd(reader, run) === name ? speakerLoad(reader, run, type) : null
+      const { load } = sourceEnd(reader, run) === name ? speakerLoad(reader, run) : { load: null }
       return load ? [{ run, load }] : []
     }),
   )
@@ -59,10 +58,10 @@ function tooLow(device: Device, { terminal, fed }: Channel): Draft[] {
     {
       severity: 'stop',
       aboutName: `${device.name}, ${terminal.name}`,
-      sentence: `${terminal.name} of ${device.name} sees ${formatNumber(load, 1)} ohm; it may see no less than ${formatNumber(least, 1)} ohm.`,
+      sentence: `${terminal.name} of ${device.name} sees ${ohmText(load)}; it may see no less than ${ohmText(least)}.`,
       advice: `Take a speaker off (${fed.map((each) => each.run.label).join(', ')}), or join them in series.`,
-      figure: { value: load, unit: 'ohm', text: `${formatNumber(load, 1)} ohm` },
-      limit: { value: least, unit: 'ohm', text: `${formatNumber(least, 1)} ohm`, setBy: 'source' },
+      figure: { value: load, unit: 'ohm', text: `${ohmText(load)}` },
+      limit: { value: least, unit: 'ohm', text: `${ohmText(least)}`, setBy: 'source' },
       basis: `1/Z = ${fed.map((each) => `1/${formatNumber(each.load.loadOhm, 1)}`).join(' + ')}`,
       figures: [terminal.key, load.toFixed(3), least].join('|'),
     },

@@ -1,10 +1,10 @@
-import { sourceEnd } from '../derive/ends.ts'
 import type { JobReader } from '../derive/jobReader.ts'
-import { pairsOf, speakerLoad } from '../derive/speakerFacts.ts'
+import { endRoom, rackOf, sourceEnd, farEnd } from '../derive/ends.ts'
+import { feedOf } from '../derive/feedOf.ts'
+import { countWord, pairsOf, speakerLoad } from '../derive/speakerLoad.ts'
 import type { Device } from '../model/device.ts'
 import type { Rack } from '../model/place.ts'
 import type { Run } from '../model/run.ts'
-import { roomOfEnd } from '../model/naming.ts'
 import { defineCheck } from './define.ts'
 
 /** A run from a head end to speakers, and the channels it takes. */
@@ -12,6 +12,9 @@ interface Demand {
   readonly run: Run
   readonly channels: number
   readonly roomId: string
+  readonly roomName: string
+  /** A cord or a terminal of an amplifier is drawn for it already. */
+  readonly isLanded: boolean
 }
 
 export const channelBudget = defineCheck({
@@ -27,52 +30,63 @@ export const channelBudget = defineCheck({
     if (!racks.length) return []
     const devices = racks.flatMap((rack) => reader.under<Device>(`devices at rack:${rack.id}`))
     const offered = devices.reduce((sum, device) => sum + channelsOffered(reader, device), 0)
-    const demands = racks.flatMap((rack) => reader.under<Run>(`runs at rack:${rack.id}`)).concat(devices.flatMap((device) => reader.under<Run>(`runs at device:${device.id}`)))
-    const asked = [...new Map(demands.map((run) => [run.id, run])).values()].flatMap((run) => demandOf(reader, run))
-    const total = asked.reduce((sum, each) => sum + each.channels, 0)
     // Without any amplifier drawn nothing is claimed: the head end is not planned yet.
-    if (offered === 0 || total <= offered) return []
+    if (offered === 0) return []
+    const asked = [...racks.map((rack) => `rack:${rack.id}`), ...devices.map((device) => `device:${device.id}`)].flatMap((place) => demandsAt(reader, place))
+    const total = asked.reduce((sum, each) => sum + each.channels, 0)
+    if (total <= offered) return []
     const silent = leftOver(asked, offered)
+    const rooms = [...new Set(silent.map((each) => each.roomName))].join(', ')
     return [
       {
         severity: 'stop',
         aboutName: room.name,
-        sentence: `${total} speaker channels are wired to ${room.name}, and its amplifiers have ${offered}. Left silent: ${silent.map((run) => run.label).join(', ')}.`,
-        advice: `Add an amplifier of at least ${total - offered} channels, or give up zones.`,
+        sentence: `${total} speaker channels are wired to ${room.name}, and its amplifiers have ${offered}. Left silent: ${silent.map((each) => each.run.label).join(', ')}${rooms ? ` (${rooms})` : ''}.`,
+        advice: `Add an amplifier of at least ${countWord(total - offered)} ${total - offered === 1 ? 'channel' : 'channels'}, or give up zones.`,
         figure: { value: total, unit: 'channels', text: `${total} channels` },
         limit: { value: offered, unit: 'channels', text: `${offered} channels`, setBy: 'source' },
-        basis: `${asked.length} speaker runs, ${total} channels; ${offered} channels on ${racks.length === 1 ? '1 rack' : `${racks.length} racks`}`,
-        figures: [total, offered].join('|'),
+        basis: `${asked.length} speaker runs ask for ${total} channels: one a pair of conductors, one a constant-voltage line; ${offered} channels on ${racks.length === 1 ? '1 rack' : `${racks.length} racks`}`,
+        figures: [total, offered, ...silent.map((each) => each.run.id)].join('|'),
       },
     ]
   },
 })
 
-function channelsOffered(reader: JobReader, device: Device): number {
+const channelsOffered = (reader: JobReader, device: Device): number => {
   const model = reader.find('deviceModel', device.modelId)
   if (!model || (model.category !== 'amplifier' && model.category !== 'receiver')) return 0
   return model.terminals.filter((terminal) => terminal.direction === 'out' && (terminal.signal === 'speaker' || terminal.signal === 'speaker-line')).length
 }
 
-function demandOf(reader: JobReader, run: Run): Demand[] {
+/** What runs from one rack or one device in it ask for. Remembered by place, so that an edit to a run counts one panel anew. */
+const demandsAt = (reader: JobReader, place: string): readonly Demand[] =>
+  reader.remember('demands', place, () => reader.under<Run>(`runs at ${place}`).flatMap((run) => demandOf(reader, run, place)))
+
+function demandOf(reader: JobReader, run: Run, place: string): Demand[] {
   const type = reader.find('cableType', run.cableTypeId)
   if (!type || type.family !== 'speaker' || run.dropped !== null) return []
-  const load = speakerLoad(reader, run, type)
+  const source = sourceEnd(reader, run)
+  const near = run[source]
+  // Said once, at the place the signal comes from; a run that only comes back to the rack asks for nothing more.
+  const isHere = near && rackOf(reader, near) !== undefined && ('rackId' in near ? `rack:${near.rackId}` : 'deviceId' in near ? `device:${near.deviceId}` : '') === place
+  const { load } = isHere ? speakerLoad(reader, run) : { load: null }
   if (!load) return []
-  const far = run[sourceEnd(reader, run) === 'a' ? 'b' : 'a']
-  return [{ run, channels: load.lineVoltageV === null ? pairsOf(type) : 1, roomId: roomOfEnd(reader.doc, far)?.id ?? '' }]
+  const room = endRoom(reader, run[farEnd(source)])
+  return [{ run, channels: load.lineVoltageV === null ? pairsOf(type) : 1, roomId: room?.id ?? '', roomName: room?.name ?? '', isLanded: feedOf(reader, run) !== undefined }]
 }
 
-/** Which runs go without when channels run out: the room with the most keeps its own, the smaller ones give way. */
-function leftOver(asked: readonly Demand[], offered: number): Run[] {
+/** Which runs go without when channels run out: those that land on a channel keep it, then the rooms that ask for most. */
+function leftOver(asked: readonly Demand[], offered: number): Demand[] {
   const byRoom = new Map<string, number>()
   for (const { roomId, channels } of asked) byRoom.set(roomId, (byRoom.get(roomId) ?? 0) + channels)
-  const order = [...asked].sort((a, b) => byRoom.get(b.roomId)! - byRoom.get(a.roomId)! || a.roomId.localeCompare(b.roomId) || a.run.serial - b.run.serial)
+  const order = [...asked].sort(
+    (a, b) => Number(b.isLanded) - Number(a.isLanded) || byRoom.get(b.roomId)! - byRoom.get(a.roomId)! || (a.roomId < b.roomId ? -1 : a.roomId > b.roomId ? 1 : 0) || a.run.serial - b.run.serial,
+  )
   let left = offered
-  const silent: Run[] = []
-  for (const { run, channels } of order) {
-    if (channels <= left) left -= channels
-    else silent.push(run)
+  const silent: Demand[] = []
+  for (const demand of order) {
+    if (demand.channels <= left) left -= demand.channels
+    else silent.push(demand)
   }
   return silent
 }

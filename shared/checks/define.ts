@@ -35,6 +35,9 @@ export type Draft = Pick<Finding, 'severity' | 'aboutName' | 'sentence' | 'figur
 
 export const defineCheck = <K extends CheckedKind>(check: Check<K>): Check<K> => check
 
+/** As many characters of figures as an acceptance keeps. */
+const mostFigures = 400
+
 /** What a check finds about a record, with the acceptance that holds: one that was given for these very figures. */
 export function findingsOf<K extends CheckedKind>(check: Check<K>, reader: JobReader, record: RecordOf<K>): Finding[] {
   return check.look(reader, record).map((draft) => ({
@@ -48,7 +51,8 @@ export function findingsOf<K extends CheckedKind>(check: Check<K>, reader: JobRe
     limit: null,
     remedy: null,
     ...draft,
-    accepted: acceptanceOf(reader, check.id, record, draft.figures),
+    figures: draft.figures.slice(0, mostFigures),
+    accepted: acceptanceOf(reader, check.id, record, draft.figures.slice(0, mostFigures)),
   }))
 }
 

@@ -1,7 +1,11 @@
-import { thinnestThatHolds } from '../calc/speaker/gaugeFor.ts'
+import { thinnestThatHolds, type GaugeOffer } from '../calc/speaker/gaugeFor.ts'
+import { ratioForLoss } from '../calc/speaker/lineLoss.ts'
+import { ownShare } from '../calc/speaker/lineTree.ts'
 import { withinLimit } from '../calc/speaker/load.ts'
-import { conductorOhmPerKm } from '../derive/speakerFacts.ts'
+import type { LengthMakeUp, SpeakerFacts } from '../derive/facts.ts'
 import { factsOf } from '../derive/runFacts.ts'
+import { conductorOhmPerKm } from '../derive/speakerFacts.ts'
+import { speakerLoad } from '../derive/speakerLoad.ts'
 import type { JobReader } from '../derive/jobReader.ts'
 import type { CableType } from '../model/cableType.ts'
 import type { Run } from '../model/run.ts'
@@ -15,76 +19,98 @@ const tradeGauges = [18, 16, 14, 12, 10]
 export const speakerLoss = defineCheck({
   id: 'speakerLoss',
   title: 'Speaker loss',
-  what: 'What a loudspeaker run loses at its length, into the load as the amplifier sees it, both conductors counted',
+  what: 'What a loudspeaker run loses at its length, to the speaker that gets least: both conductors counted, legs after it included',
   tier: 'practice',
   source: 'Ohm’s law with copper at 17.241 ohm mm²/km (wire tables); the limit is the company’s choice, since published rules differ (5 % or 10 % of the load, 0.5 or 1 dB)',
   about: 'run',
   limits: ({ speakerLossConvention: convention, speakerLossCaution, speakerLossStop }) => [
     { severity: 'caution', text: `over ${lossText(speakerLossCaution, convention)}` },
     { severity: 'stop', text: `over ${lossText(speakerLossStop, convention)}` },
+    { severity: 'note', text: 'a load or a size not known' },
   ],
   look: (reader, run) => {
     const { speaker, length } = factsOf(reader, run)
     const type = reader.find('cableType', run.cableTypeId)
-    if (!speaker || !length || !type) return []
-    const { limits, conductorUnit } = reader.job()
-    const convention = limits.speakerLossConvention
-    const loss = lossIn(speaker, convention)
-    const limit = limits.speakerLossCaution
-    if (withinLimit(loss, limit)) return []
-    const isStop = !withinLimit(loss, limits.speakerLossStop)
-    const size = formatConductor(type, conductorUnit)
-    const better = betterCable(reader, run, type, length.totalMm, speaker.loadOhm)
-    return [
-      {
-        severity: isStop ? 'stop' : 'caution',
-        aboutName: run.label,
-        sentence: `${size} loses ${lossText(loss, convention)} at ${lengthText(reader, length.totalMm)} into ${speaker.loadText}; the limit is ${lossText(isStop ? limits.speakerLossStop : limit, convention)}.`,
-        advice: better.advice,
-        figure: { value: loss, unit: lossWords[convention].unit, text: `${formatNumber(loss, lossWords[convention].decimals)} ${lossWords[convention].unit}` },
-        limit: { value: limit, unit: lossWords[convention].unit, text: `${formatNumber(limit, lossWords[convention].decimals)} ${lossWords[convention].unit}`, setBy: 'job' },
-        basis: basisOf(reader, type, length.totalMm, speaker.loopResistanceOhm, speaker.loadOhm, loss),
-        figures: [type.code, length.totalMm, speaker.loadOhm.toFixed(3), convention, limit, limits.speakerLossStop, limits.conductorTemperatureC].join('|'),
-        remedy: better.remedy,
-      } satisfies Draft,
-    ]
+    if (!length || type?.family !== 'speaker') return []
+    if (!speaker) return unknown(reader, run, type)
+    const { limits } = reader.job()
+    const loss = lossIn(speaker, limits.speakerLossConvention)
+    if (withinLimit(loss, limits.speakerLossCaution)) return []
+    return [overLimit(reader, { run, type, length, speaker, loss })]
   },
 })
 
-/** The thinnest cable of the job, of the same make-up and fit for the same places, that stays within the limit. */
-function betterCable(reader: JobReader, run: Run, type: CableType, lengthMm: number, loadOhm: number): { advice: string; remedy: Draft['remedy'] & object | null } {
+interface Case {
+  readonly run: Run
+  readonly type: CableType
+  readonly length: LengthMakeUp
+  readonly speaker: SpeakerFacts
+  readonly loss: number
+}
+
+function overLimit(reader: JobReader, { run, type, length, speaker, loss }: Case): Draft {
   const { limits, conductorUnit } = reader.job()
-  const convention = limits.speakerLossConvention
+  const { speakerLossConvention: convention, speakerLossCaution: caution, speakerLossStop: stop } = limits
+  const isStop = !withinLimit(loss, stop)
+  const limit = isStop ? stop : caution
+  const { unit, decimals } = lossWords[convention]
+  const better = betterCable(reader, run, type, length.totalMm, speaker)
+  const onward = speaker.onwardFactor > 1 ? ', with the legs after it,' : ''
+  return {
+    severity: isStop ? 'stop' : 'caution',
+    aboutName: run.label,
+    sentence: `${formatConductor(type, conductorUnit)}${onward} loses ${lossText(loss, convention)} at ${lengthText(reader, length.totalMm)} into ${speaker.loadText}; the limit is ${lossText(limit, convention)}.`,
+    advice: better.advice,
+    figure: { value: loss, unit, text: `${formatNumber(loss, decimals)} ${unit}` },
+    limit: { value: limit, unit, text: `${formatNumber(limit, decimals)} ${unit}`, setBy: 'job' },
+    basis: basisOf(reader, { run, type, length, speaker, loss }),
+    figures: [type.code, length.totalMm, speaker.loadOhm.toFixed(3), loss.toFixed(3), convention, caution, stop, limits.conductorTemperatureC].join('|'),
+    remedy: better.remedy,
+  }
+}
+
+/** Nothing is worked out without a load or a size: said once, not guessed. */
+function unknown(reader: JobReader, run: Run, type: CableType): Draft[] {
+  const { load, missing } = speakerLoad(reader, run)
+  const what = missing ?? (load && !load.untapped.length && conductorOhmPerKm(type, reader.job().limits.conductorTemperatureC) === null ? `the conductor size of ${type.code}` : null)
+  if (what === null) return []
+  return [{ severity: 'note', aboutName: run.label, sentence: `The loss of this run is not worked out: ${what} is not known.`, advice: 'Give the model, the device or the cable type that figure.', basis: 'Rc = 2 r L; Rc/Z needs both r and Z', figures: what }]
+}
+
+/** The thinnest cable of the job, of the same make-up and fit for the same places, that stays within the limit. */
+function betterCable(reader: JobReader, run: Run, type: CableType, lengthMm: number, speaker: SpeakerFacts): { advice: string; remedy: Draft['remedy'] & object | null } {
+  const { limits, conductorUnit } = reader.job()
+  const { speakerLossConvention: convention, speakerLossCaution: caution, conductorTemperatureC } = limits
+  // What the legs after this run lose is not its to lose: its own share of the limit is less by that.
+  const share = ownShare(ratioForLoss(caution, convention) ?? 0, speaker.onwardFactor) ?? 0
+  if (share <= 0) return { advice: 'The legs after this run lose more than that by themselves: begin with those.', remedy: null }
+  const choose = (offers: readonly GaugeOffer[]) => thinnestThatHolds(offers, lengthMm / 1000, speaker.behindOhm, 100 * share, 'impedance')
+  const upTo = (metres: number) => `stays under ${lossText(caution, convention)} up to ${lengthText(reader, Math.floor(metres * 1000))}`
   const offers = reader.all('cableType').filter((each) => each.family === 'speaker' && each.conductors === type.conductors && sameFitness(each, type))
-  const sized = offers.flatMap((each) => {
-    const conductorOhm = conductorOhmPerKm(each, limits.conductorTemperatureC)
-    return conductorOhm === null ? [] : [{ id: each.id, conductorOhmPerKm: conductorOhm }]
-  })
-  const best = thinnestThatHolds(sized, lengthMm / 1000, loadOhm, limits.speakerLossCaution, convention)
+  const best = choose(offers.flatMap((each) => offerOf(each.id, conductorOhmPerKm(each, conductorTemperatureC))))
   const chosen = best && offers.find((each) => each.id === best.id)
   if (best && chosen)
-    return {
-      advice: `${formatConductor(chosen, conductorUnit)} stays under ${lossText(limits.speakerLossCaution, convention)} up to ${lengthText(reader, Math.floor(best.longestM * 1000))}.`,
-      remedy: { label: `Change to ${chosen.code}`, intent: { verb: 'run.changeCable', args: { ids: [run.id], cableTypeId: chosen.id } } },
-    }
-  const gauges = tradeGauges.flatMap((awg) => {
-    const conductorOhm = conductorOhmPerKm({ ...type, awg, areaMm2: null, resistanceOhmPerKm: null }, limits.conductorTemperatureC)
-    return conductorOhm === null ? [] : [{ id: String(awg), conductorOhmPerKm: conductorOhm }]
-  })
-  const gauge = thinnestThatHolds(gauges, lengthMm / 1000, loadOhm, limits.speakerLossCaution, convention)
-  return { advice: gauge ? `${gauge.id} AWG would do; no cable of that size is on the job.` : 'No usual gauge would do: move the amplifier nearer, or raise the load.', remedy: null }
+    return { advice: `${formatConductor(chosen, conductorUnit)} ${upTo(best.longestM)}.`, remedy: { label: `Change to ${chosen.code}`, intent: { verb: 'run.changeCable', args: { ids: [run.id], cableTypeId: chosen.id } } } }
+  const gauge = choose(tradeGauges.flatMap((awg) => offerOf(String(awg), conductorOhmPerKm({ ...type, awg, areaMm2: null, resistanceOhmPerKm: null }, conductorTemperatureC))))
+  return { advice: gauge ? `${formatConductor({ awg: Number(gauge.id), areaMm2: null }, conductorUnit)} ${upTo(gauge.longestM)}; no cable of that size is on the job.` : 'No usual gauge would do: move the amplifier nearer, or raise the load.', remedy: null }
 }
+
+const offerOf = (id: string, conductorOhm: number | null): GaugeOffer[] => (conductorOhm === null ? [] : [{ id, conductorOhmPerKm: conductorOhm }])
 
 /** A stand-in is made for the same places: indoors or out, in the ground, in a plenum. */
 const sameFitness = (a: CableType, b: CableType) => a.wet === b.wet && a.outdoor === b.outdoor && a.buried === b.buried && a.jacketRating.endsWith('P') === b.jacketRating.endsWith('P')
 
-function basisOf(reader: JobReader, type: CableType, lengthMm: number, loopOhm: number, loadOhm: number, loss: number): string {
+function basisOf(reader: JobReader, { type, length, speaker, loss }: Case): string {
   const { limits } = reader.job()
   const convention = limits.speakerLossConvention
   const conductorOhm = conductorOhmPerKm(type, limits.conductorTemperatureC)
   const stated = type.resistanceOhmPerKm !== null ? 'as its maker states' : `${type.stranding === 'class5' ? 'class 5' : type.stranding} ${type.material === 'cca' ? 'copper-clad aluminium' : 'copper'}`
-  return (
-    `Rc = 2 × ${formatNumber(lengthMm / 1000, 1)} m × ${formatNumber(conductorOhm ?? 0, 2)} ohm/km (${stated}, ${limits.conductorTemperatureC} °C) = ${formatNumber(loopOhm, 3)} ohm; Z = ${formatNumber(loadOhm, 2)} ohm; ` +
-    `${lossWords[convention].name}: ${lossWords[convention].formula} = ${formatNumber(loss, lossWords[convention].decimals)} ${lossWords[convention].unit}`
-  )
+  const total = lossText(loss, convention)
+  const onward = speaker.onwardFactor > 1 ? `, and ${formatNumber(20 * Math.log10(speaker.onwardFactor), 2)} dB in the legs after it, ${total} in all` : ` = ${total}`
+  return [
+    `Rc = 2 × ${formatNumber(length.totalMm / 1000, 1)} m (${length.basis}) × ${formatNumber(conductorOhm ?? 0, 2)} ohm/km (${stated}, ${limits.conductorTemperatureC} °C) = ${formatNumber(speaker.loopResistanceOhm, 3)} ohm`,
+    `Z = ${formatNumber(speaker.behindOhm, 2)} ohm${speaker.assumed ? ' (no cord drawn: the speaker at the plate is taken to be on it)' : ''}`,
+    `${lossWords[convention].name}: ${lossWords[convention].formula}${onward}`,
+    ...(speaker.uncounted.length ? [`left out, no length: ${speaker.uncounted.join(', ')}`] : []),
+  ].join('; ')
 }

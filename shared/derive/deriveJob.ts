@@ -2,10 +2,11 @@ import { checkedKinds, type CheckedKind } from '../checks/define.ts'
 import { severities, type Finding, type Severity } from '../checks/finding.ts'
 import { findAbout } from '../checks/registry.ts'
 import type { JobDocument } from '../model/jobDocument.ts'
-import { fieldEnd, roomOfEnd } from '../model/naming.ts'
+import { fieldEnd } from '../model/naming.ts'
 import type { Kind } from '../model/record.ts'
 import type { Run } from '../model/run.ts'
 import { Cells } from './cells.ts'
+import { endRoom } from './ends.ts'
 import type { Progress, RunFacts } from './facts.ts'
 import { mergeFindings, sortedFindings } from './findingOrder.ts'
 import { differences, JobIndex } from './jobIndex.ts'
@@ -151,21 +152,10 @@ function runFacts(reader: JobReader, run: Run): RunFacts {
   return { run, stage: said.stage, ends: said.ends, printed: said.printed, dropped: run.dropped, roomId: room?.id ?? null, levelId: room?.levelId ?? null, length, lengthMissing, speaker, findings }
 }
 
-/** The room at a run's field end; every record on the way to it is noted. */
+/** The room at a run's field end; what decides which end that is, is noted. */
 function noteRoom(reader: JobReader, run: Run) {
-  for (const end of [run.a, run.b]) {
-    if (!end) continue
-    if ('plateId' in end) reader.find('room', reader.find('plate', end.plateId)?.roomId)
-    else if ('rackId' in end) reader.find('rack', end.rackId)
-    else {
-      const device = reader.find('device', end.deviceId)
-      reader.find('plate', device?.plateId)
-      reader.find('rack', device?.rackId)
-      reader.find('room', device?.roomId)
-    }
-  }
-  const room = roomOfEnd(reader.doc, run[fieldEnd(reader.doc, run)])
-  return reader.find('room', room?.id)
+  for (const end of [run.a, run.b]) if (end && 'deviceId' in end) reader.find('device', end.deviceId)
+  return endRoom(reader, run[fieldEnd(reader.doc, run)])
 }
 
 function countOpen(findings: readonly Finding[]): Record<Severity, number> {

@@ -1,4 +1,5 @@
 import type { Device, Terminal } from '../model/device.ts'
+import type { Room } from '../model/place.ts'
 import type { Cord, EndName, Run, RunEnd } from '../model/run.ts'
 import { endKey } from './jobIndex.ts'
 import type { JobReader } from './jobReader.ts'
@@ -51,3 +52,12 @@ export function sourceEnd(reader: JobReader, run: Run): EndName {
 }
 
 export const farEnd = (end: EndName): EndName => (end === 'a' ? 'b' : 'a')
+
+/** The room an end is in, every record on the way to it noted. */
+export function endRoom(reader: JobReader, end: RunEnd | null): Room | undefined {
+  if (!end) return undefined
+  if ('plateId' in end) return reader.find('room', reader.find('plate', end.plateId)?.roomId)
+  if ('rackId' in end) return reader.find('room', reader.find('rack', end.rackId)?.roomId)
+  const device = reader.find('device', end.deviceId)
+  return reader.find('room', reader.find('plate', device?.plateId)?.roomId ?? reader.find('rack', device?.rackId)?.roomId ?? device?.roomId)
+}

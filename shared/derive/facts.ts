@@ -37,7 +37,16 @@ export interface SpeakerFacts {
   readonly loadText: string
   /** Line voltage where it is a constant-voltage line, V; null: low impedance. */
   readonly lineVoltageV: number | null
+  /** No cord is drawn to some speaker: it is taken to be on this run because it stands at the plate. */
+  readonly assumed: boolean
   readonly loopResistanceOhm: number
+  /** Impedance behind the run's end, legs after it included, ohm. */
+  readonly behindOhm: number
+  /** Level at the run's end against that at the speaker that gets least: 1 where no leg comes after. */
+  readonly onwardFactor: number
+  /** Labels of legs after it whose length is not known, so that they are left out. */
+  readonly uncounted: readonly string[]
+  /** Level lost at the speaker that gets least, dB, legs after this run included; so are the three shares below. */
   readonly lossDb: number
   /** Loop resistance as a share of the load, percent. */
   readonly impedancePercent: number

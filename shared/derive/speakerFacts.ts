@@ -1,83 +1,81 @@
 import { conductorResistanceOhmPerKm } from '../calc/conductor/resistance.ts'
 import { lineLoss, loopResistanceOhm } from '../calc/speaker/lineLoss.ts'
-import { exactLineVoltage, lineLoadOhm, parallelOhm, seriesOhm } from '../calc/speaker/load.ts'
+import { lineNode, totalRatio, type LineLeg, type LineNode } from '../calc/speaker/lineTree.ts'
 import type { CableType } from '../model/cableType.ts'
 import type { Run } from '../model/run.ts'
-import { formatNumber } from '../units.ts'
-import type { LengthMakeUp, SpeakerFacts } from './facts.ts'
+import type { SpeakerFacts } from './facts.ts'
 import type { JobReader } from './jobReader.ts'
-import { speakersReached, type ReachedSpeaker } from './speakersReached.ts'
-
-export interface SpeakerLoad {
-  readonly loadOhm: number
-  readonly text: string
-  readonly lineVoltageV: number | null
-  readonly totalW: number | null
-  readonly speakers: readonly ReachedSpeaker[]
-  /** On a constant-voltage line, those without a tap: left on their low impedance they short the line. */
-  readonly untapped: readonly ReachedSpeaker[]
-}
-
-/** Pairs of conductors: a cable of four carries two channels. */
-export const pairsOf = (type: CableType): number => Math.max(1, Math.floor(type.conductors / 2))
-
-const ohms = (value: number) => `${formatNumber(value, Number.isInteger(Math.round(value * 100) / 100) ? 0 : 1)} ohm`
-const nominal = (speaker: ReachedSpeaker) => speaker.device.loadOhm ?? speaker.ratings.loadOhm ?? null
-
-/** The load that a run's speakers make, as the amplifier sees it; null where it feeds none or a load is not known. */
-export function speakerLoad(reader: JobReader, run: Run, type: CableType): SpeakerLoad | null {
-  const speakers = speakersReached(reader, run)
-  if (!speakers.length) return null
-  const voltage = speakers.find((speaker) => speaker.ratings.lineVoltageV !== undefined)?.ratings.lineVoltageV
-  return voltage === undefined ? lowImpedance(run, type, speakers) : constantVoltage(exactLineVoltage(voltage), speakers)
-}
-
-function constantVoltage(lineVoltageV: number, speakers: readonly ReachedSpeaker[]): SpeakerLoad | null {
-  const untapped = speakers.filter((speaker) => speaker.device.tapW === null)
-  const totalW = speakers.reduce((sum, speaker) => sum + (speaker.device.tapW ?? 0), 0)
-  const tapped = totalW > 0 ? lineLoadOhm(lineVoltageV, totalW) : null
-  const shorts = untapped.map((speaker) => nominal(speaker) ?? 8)
-  const loadOhm = parallelOhm([...(tapped === null ? [] : [tapped]), ...shorts])
-  return loadOhm === null ? null : { loadOhm, text: `${speakers.length} taps, ${formatNumber(totalW, totalW % 1 ? 1 : 0)} W on ${formatNumber(lineVoltageV, 1)} V`, lineVoltageV, totalW, speakers, untapped }
-}
-
-/** Speakers are dealt to the cable's pairs in turn; the lowest load of a pair is the one that counts. */
-function lowImpedance(run: Run, type: CableType, speakers: readonly ReachedSpeaker[]): SpeakerLoad | null {
-  const pairs = pairsOf(type)
-  const perPair: number[][] = Array.from({ length: Math.min(pairs, speakers.length) }, () => [])
-  for (const [index, speaker] of speakers.entries()) {
-    const load = nominal(speaker)
-    if (load === null) return null
-    perPair[index % perPair.length]!.push(load)
-  }
-  const join = run.loadJoin === 'series' ? seriesOhm : parallelOhm
-  let worst: { ohm: number; loads: readonly number[] } | null = null
-  for (const loads of perPair) {
-    const ohm = join(loads)
-    if (ohm === null) return null
-    if (!worst || ohm < worst.ohm) worst = { ohm, loads }
-  }
-  if (!worst) return null
-  const text = worst.loads.length === 1 ? ohms(worst.ohm) : `${worst.loads.map((load) => ohms(load)).join(' and ')} in ${run.loadJoin}, ${ohms(worst.ohm)}`
-  return { loadOhm: worst.ohm, text, lineVoltageV: null, totalW: null, speakers, untapped: [] }
-}
+import { lengthOf } from './lengthOf.ts'
+import { speakerLoad, type LoadedSpeaker, type SpeakerLoad } from './speakerLoad.ts'
 
 /** Resistance of one conductor of a type at the job's temperature, ohm/km; null: its size is not known. */
 export const conductorOhmPerKm = (type: CableType, temperatureC: number): number | null =>
   conductorResistanceOhmPerKm({ awg: type.awg, areaMm2: type.areaMm2, stranding: type.stranding, material: type.material, statedOhmPerKm: type.resistanceOhmPerKm }, temperatureC)
 
-/** What a loudspeaker run loses at its length. Null where it feeds no speaker, or length or conductor is not known. */
-export function speakerFacts(reader: JobReader, run: Run, length: LengthMakeUp | null): SpeakerFacts | null {
+/** Loop resistance of a run at its length, ohm; null: length or size is not known. */
+function loopOf(reader: JobReader, run: Run): number | null {
   const type = reader.find('cableType', run.cableTypeId)
-  if (!type || type.family !== 'speaker') return null
-  const load = speakerLoad(reader, run, type)
-  const ohmPerKm = conductorOhmPerKm(type, reader.job().limits.conductorTemperatureC)
-  if (!load || !length || ohmPerKm === null) return null
-  const loop = loopResistanceOhm(length.totalMm / 1000, ohmPerKm)
-  const loss = loop === null ? null : lineLoss(loop, load.loadOhm)
-  if (loop === null || loss === null) return null
+  const { length } = lengthOf(reader, run)
+  const ohmPerKm = type ? conductorOhmPerKm(type, reader.job().limits.conductorTemperatureC) : null
+  return length && ohmPerKm !== null ? loopResistanceOhm(length.totalMm / 1000, ohmPerKm) : null
+}
+
+/**
+ * What a loudspeaker run loses at its length to the speaker that gets least, with the legs after it: hops of a line, and
+ * what goes on from a volume control. Null where it feeds no speaker, or length, load or conductor is not known.
+ */
+export function speakerFacts(reader: JobReader, run: Run): SpeakerFacts | null {
+  const loop = loopOf(reader, run)
+  const { load } = speakerLoad(reader, run)
+  if (!load || loop === null) return null
+  const uncounted = new Set<string>()
+  let worst: { ratio: number; node: LineNode } | null = null
+  for (const pair of load.pairs) {
+    const node = nodeOf(reader, run, load, pair, uncounted)
+    const ratio = node && totalRatio(loop, node)
+    if (node && ratio !== null && (!worst || ratio > worst.ratio)) worst = { ratio, node }
+  }
+  const loss = worst && lineLoss(worst.ratio, 1)
+  if (!worst || !loss) return null
   return {
-    loadOhm: load.loadOhm, loadText: load.text, lineVoltageV: load.lineVoltageV, loopResistanceOhm: loop,
+    loadOhm: load.loadOhm, loadText: load.text, lineVoltageV: load.lineVoltageV, assumed: load.assumed, loopResistanceOhm: loop,
+    behindOhm: worst.node.behindOhm, onwardFactor: worst.node.worstFactor, uncounted: [...uncounted].sort(),
     lossDb: loss.decibel, impedancePercent: loss.impedance, voltagePercent: loss.voltage, powerPercent: loss.power,
   }
+}
+
+/** A run's end seen from its beginning, for one pair of conductors. */
+function nodeOf(reader: JobReader, run: Run, load: SpeakerLoad, pair: readonly LoadedSpeaker[], uncounted: Set<string>): LineNode | null {
+  const legLoop = (leg: Run) => {
+    const loop = loopOf(reader, leg)
+    if (loop === null) uncounted.add(leg.label)
+    return loop ?? 0
+  }
+  if (run.loadJoin === 'series' && load.lineVoltageV === null) return seriesNode(pair, legLoop)
+  const treeFrom = (depth: number, speakers: readonly LoadedSpeaker[]): Pick<LineLeg, 'loadsOhm' | 'onward'> => ({
+    loadsOhm: speakers.filter((speaker) => speaker.runs.length === depth).map((speaker) => speaker.ohm),
+    onward: legsAt(depth, speakers).map(({ leg, behind }) => ({ loopOhm: legLoop(leg), ...treeFrom(depth + 1, behind) })),
+  })
+  return lineNode(treeFrom(1, pair))
+}
+
+/** The legs that go on after this many, each with the speakers behind it. */
+function legsAt(depth: number, speakers: readonly LoadedSpeaker[]): { leg: Run; behind: LoadedSpeaker[] }[] {
+  const legs = new Map<string, { leg: Run; behind: LoadedSpeaker[] }>()
+  for (const speaker of speakers) {
+    const leg = speaker.runs[depth]
+    if (!leg) continue
+    const known = legs.get(leg.id)
+    if (known) known.behind.push(speaker)
+    else legs.set(leg.id, { leg, behind: [speaker] })
+  }
+  return [...legs.values()]
+}
+
+/** In series one current goes through every leg and every speaker: all loops add up against all loads. */
+function seriesNode(pair: readonly LoadedSpeaker[], legLoop: (leg: Run) => number): LineNode | null {
+  const legs = new Map(pair.flatMap((speaker) => speaker.runs.slice(1)).map((leg) => [leg.id, leg]))
+  const loops = [...legs.values()].reduce((sum, leg) => sum + legLoop(leg), 0)
+  const loads = pair.reduce((sum, speaker) => sum + speaker.ohm, 0)
+  return lineNode({ loadsOhm: [], onward: [{ loopOhm: loops, loadsOhm: [loads], onward: [] }] })
 }
