@@ -1,4 +1,4 @@
-import { labelFor, type LabelFacts } from '../labels/pattern.ts'
+import { labelFor, labelsFor, type LabelFacts } from '../labels/pattern.ts'
 import { find, jobOf, type JobDocument } from '../model/jobDocument.ts'
 import { fieldEnd, plateOfEnd, rackIdOfEnd, roomOfEnd } from '../model/naming.ts'
 import type { Run } from '../model/run.ts'
@@ -81,11 +81,10 @@ export function withLabels(doc: JobDocument, change: Change, runIds: (after: Job
 /** A label that the pattern could have given stays: nobody is renumbered without need. */
 function keepsLabel(doc: JobDocument, run: Run, taken: ReadonlySet<string>): boolean {
   if (taken.has(run.label.toUpperCase())) return false
-  const refused = new Set<string>()
-  for (let tries = 0; tries < 200; tries++) {
-    const label = labelFor(jobOf(doc).labelPattern, labelFacts(doc, run), (each) => refused.has(each))
+  let tries = 0
+  for (const label of labelsFor(jobOf(doc).labelPattern, labelFacts(doc, run))) {
     if (label === run.label) return true
-    refused.add(label)
+    if (++tries === 200) return false
   }
   return false
 }

@@ -67,20 +67,29 @@ export interface LabelFacts {
 }
 
 /**
- * The label that a pattern gives for a run: the first that nobody has. Where the pattern counts with {n}, the number
- * goes up until the label is free; where it does not, a suffix does, so that the answer is always unique.
- * Labels are compared without regard to capitals, because people read them so.
+ * The labels that a pattern can give a run, the first choice first. Where the pattern counts with {n}, the number goes
+ * up to 10,000 and then the serial number tells runs apart; where it does not, a suffix counts without end.
  */
-export function labelFor(pattern: string, facts: LabelFacts, isTaken: (label: string) => boolean): string {
+export function* labelsFor(pattern: string, facts: LabelFacts): Generator<string> {
   const parsed = parsePattern(pattern)
   const parts: PatternPart[] = 'parts' in parsed ? parsed.parts : [{ token: 'serial', digits: 4 }]
   const write = (n: number) => parts.map((part) => ('text' in part ? part.text : fill(part.token, part.digits, facts, n))).join('').slice(0, 24)
   const counts = parts.some((part) => 'token' in part && part.token === 'n')
-  for (let n = 1; ; n++) {
-    const label = counts ? write(n) : n === 1 ? write(1) : `${write(1).slice(0, 20)}.${n}`
+  for (let n = 1; !counts || n <= 10_000; n++) yield counts ? write(n) : n === 1 ? write(1) : `${write(1).slice(0, 20)}.${n}`
+  yield `${write(1).slice(0, 16)}.${facts.serial}`
+}
+
+/**
+ * The label that a pattern gives for a run: the first that nobody has, or else the last there is.
+ * Labels are compared without regard to capitals, because people read them so.
+ */
+export function labelFor(pattern: string, facts: LabelFacts, isTaken: (label: string) => boolean): string {
+  let last = ''
+  for (const label of labelsFor(pattern, facts)) {
     if (!isTaken(label)) return label
-    if (counts && n > 9999) return `${write(1).slice(0, 16)}.${facts.serial}`
+    last = label
   }
+  return last
 }
 
 function fill(token: PatternToken, digits: number, facts: LabelFacts, n: number): string {

@@ -80,15 +80,31 @@ function assertEnd(doc: JobDocument, record: JobRecord, end: RunEnd | CordEnd | 
 
 function assertUnique(doc: JobDocument, change: Change, written: readonly JobRecord[]) {
   const touched = new Map(change.updated.map((update) => [keyOf(update), update.fields]))
+  const holders = new Map<Kind, ReadonlyMap<string, readonly JobRecord[]>>()
   for (const record of written) {
     const rule = uniqueFields[record.kind]
     if (!rule) continue
     const fields = touched.get(keyOf(record))
     if (fields && !rule.fields.some((field) => field in fields)) continue
-    for (const key of uniqueKeyOf(record))
-      for (const other of doc.records[record.kind].values() as Iterable<JobRecord>)
-        if (other.id !== record.id && uniqueKeyOf(other).includes(key)) throw new AppError('refused', rule.say(doc, record, other), { kind: record.kind, id: record.id, other: other.id })
+    const held = holders.get(record.kind) ?? holdersOf(doc, record.kind)
+    holders.set(record.kind, held)
+    for (const key of uniqueKeyOf(record)) {
+      const other = held.get(key)?.find((each) => each.id !== record.id)
+      if (other) throw new AppError('refused', rule.say(doc, record, other), { kind: record.kind, id: record.id, other: other.id })
+    }
   }
+}
+
+/** Who has which unique key, read once for a whole change: a change of thousands must not look at each pair. */
+function holdersOf(doc: JobDocument, kind: Kind): ReadonlyMap<string, readonly JobRecord[]> {
+  const holders = new Map<string, JobRecord[]>()
+  for (const record of doc.records[kind].values() as Iterable<JobRecord>)
+    for (const key of uniqueKeyOf(record)) {
+      const known = holders.get(key)
+      if (known) known.push(record)
+      else holders.set(key, [record])
+    }
+  return holders
 }
 
 /** What a person calls a record. */
