@@ -3,11 +3,11 @@ import { computed, type ComputedRef } from 'vue'
 import type { RiserLayout, XY } from '../layout/riserLayout.ts'
 
 export const zoomRange = { least: 0.5, most: 4, largestFit: 1.4 } as const
-const margin = 20
+const margin = 6
 
 /** Where one looks: fit, go to a point, zoom by a step. */
 export function useRiserView(layout: ComputedRef<RiserLayout>) {
-  const { viewport, dimensions, setViewport, zoomTo, screenToFlowCoordinate, flowToScreenCoordinate } = useVueFlow({ id: 'riser' })
+  const { viewport, dimensions, setViewport, zoomTo, screenToFlowCoordinate, flowToScreenCoordinate } = useVueFlow('riser')
   const least = computed(() => Math.min(zoomRange.least, fitZoom()))
 
   function fitZoom(): number {
@@ -19,7 +19,7 @@ export function useRiserView(layout: ComputedRef<RiserLayout>) {
     if (!dimensions.value.width) return
     const zoom = Math.max(0.2, fitZoom())
     const { width, height } = layout.value
-    const x = Math.max(margin / 2, (dimensions.value.width - width * zoom) / 2)
+    const x = Math.max(margin, (dimensions.value.width - width * zoom) / 2)
     void setViewport({ x, y: Math.max(margin / 4, (dimensions.value.height - height * zoom) / 2), zoom }, { duration })
   }
   /** Brings a point into view, and no more than that where it is there already. */

@@ -29,13 +29,13 @@ function rackEdge(bay: PlacedBay, placing: Placing): number | null {
 }
 
 /** Names of the levels at the left edge, each with its datum where the level has a floor. */
-export function drawCaptions(storeys: readonly Storey[], heights: Heights): LevelCaption[] {
+export function drawCaptions(storeys: readonly Storey[], heights: Heights, step: number): LevelCaption[] {
   return storeys.flatMap((storey) => {
     const box = heights.storeys[storey.index]!
     const small = storey.kind !== 'full'
     const middle = storey.kind === 'roof' ? heights.eave + 16 : (box.ceiling + box.floor) / 2
     return storey.levels.map((level, index): LevelCaption => ({
-      levelId: level.id, x: 10, y: (small ? middle - 12 : middle - 30) + index * 62, small,
+      levelId: level.id, x: 10, y: (small ? middle - 12 : middle - 30) - (storey.levels.length > 1 ? 24 : 0) + (index - (storey.levels.length - 1) / 2) * step, small,
       datum: small || index > 0 ? null : { y: box.floor, x1: box.x0 - 2, elevationMm: level.elevationMm },
     }))
   })

@@ -29,7 +29,7 @@ interface Wants {
 export function stackHeights({ storeys, placing, trunks, locals, seats, rackUnits }: Wants): Heights {
   const pitched = storeys.some((storey) => storey.kind === 'roof')
   const inRoof = seats.some((each) => each.roof.length > 0) || storeys.some((storey) => storey.kind === 'roof' && storey.rooms.some((room) => room.fixtures.some((fixture) => !fixture.isOutside)))
-  const apex = metrics.margin.top + (inRoof ? 10 : 6)
+  const apex = metrics.margin.top + (inRoof ? 8 : 6)
   const eave = pitched ? apex + metrics.roof : apex + 10
   const boxes: StoreyBox[] = []
   let at = eave
@@ -46,7 +46,7 @@ export function stackHeights({ storeys, placing, trunks, locals, seats, rackUnit
     const top = at
     const trunk = top + metrics.voidTop + roofTags + trunks[storey.index]!
     const ceiling = Math.round(trunk + locals[storey.index]! + metrics.tagOver + tags + (tags ? metrics.tagUnder - (metrics.tag.rowHeight - metrics.tag.height) : 0))
-    const floor = ceiling + (storey.kind === 'crawl' ? metrics.crawl + 8 : bayHeight(storey, rackUnits))
+    const floor = ceiling + (storey.kind === 'crawl' ? metrics.crawl + 8 : bayHeight(storey, rackUnits, placing.isLarge))
     boxes.push({ ...base, top, trunk, ceiling, floor })
     at = floor + (storey.kind === 'full' && storeys[storey.index - 1]?.kind === 'crawl' ? 14 : 0)
   }
@@ -59,8 +59,8 @@ export function stackHeights({ storeys, placing, trunks, locals, seats, rackUnit
 /** Tags of what leaves into the roof stand over the trunk, partly in the roof itself. */
 export const roofTagHeight = ({ roofRows }: StoreySeats): number => Math.max(0, roofRows * metrics.tag.rowHeight - metrics.voidTop)
 
-function bayHeight(storey: Storey, rackUnits: ReadonlyMap<string, number>): number {
-  const drawn = Math.min(metrics.bay.most, Math.max(metrics.bay.least, (storey.ceilingMm / mmPerFoot) * metrics.bay.pxPerFoot))
+function bayHeight(storey: Storey, rackUnits: ReadonlyMap<string, number>, isLarge: boolean): number {
+  const drawn = Math.min(metrics.bay.most, Math.max(metrics.bay.least, (storey.ceilingMm / mmPerFoot) * (isLarge ? metrics.bay.pxPerFootLarge : metrics.bay.pxPerFoot)))
   const rows = Math.max(0, ...storey.rooms.flatMap((room) => room.racks.map((rack) => rackUnits.get(rack.id) ?? 0)))
   return Math.round(Math.max(drawn, Math.min(300, rows ? metrics.rack.over + metrics.rack.under + 2 * metrics.rack.pad + rows * 8 : 0)))
 }

@@ -6,6 +6,8 @@ import type { PlacedBay } from './placeRooms.ts'
 /** How far a lower storey must reach past the one over it to get a roof of its own. */
 const leanTo = 12
 const lip = 8
+/** The ground goes on past the drawing, as far as anyone can see. */
+const beyond = 5000
 
 /** Draws the structure: one continuous body, the ground, slabs and posts outside, joist ends under the floors. */
 export function drawHouse(heights: Heights, bays: readonly PlacedBay[], width: number): HouseDrawing {
@@ -17,8 +19,8 @@ export function drawHouse(heights: Heights, bays: readonly PlacedBay[], width: n
   const { ground, height } = heights
   const atGround = full.find((storey) => storey.top <= ground && storey.floor >= ground - 34) ?? base
   return {
-    ground: `M0 ${ground}H${width}V${height}H0Z`,
-    groundLine: `M0 ${ground}H${f2(atGround.x0)}M${f2(atGround.x1)} ${ground}H${width}`,
+    ground: `M${-beyond} ${ground}H${width + beyond}V${height + beyond}H${-beyond}Z`,
+    groundLine: `M${-beyond} ${ground}H${f2(atGround.x0)}M${f2(atGround.x1)} ${ground}H${width + beyond}`,
     earth: earth(ground, atGround, width),
     body: body(heights, full, reachLeft, reachRight),
     voids: voids(heights),
@@ -48,7 +50,7 @@ function body({ apex, eave, pitched, bottom, ground }: Heights, full: readonly S
 function sideOf(full: readonly StoreyBox[], at: (storey: StoreyBox, index: number) => { wall: number; reach: number }, way: 1 | -1, ground: number): string {
   const points: [number, number][] = []
   const outOf = (index: number) => (at(full[index]!, index).reach - at(full[index + 1]!, index + 1).wall) * way
-  const isLean = (index: number) => index < full.length - 1 && outOf(index) > leanTo && full[index]!.top < ground - 6
+  const isLean = (index: number) => index < full.length - 1 && outOf(index) > leanTo && full[index]!.top < ground - 40
   for (let index = full.length - 1; index >= 0; index--) {
     const storey = full[index]!
     const { wall, reach } = at(storey, index)

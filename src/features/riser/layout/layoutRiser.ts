@@ -56,7 +56,7 @@ export function layoutRiser(doc: JobDocument, options: LayoutOptions): RiserLayo
     height: Math.ceil(heights.height),
     house: drawHouse(heights, placing.bays, Math.ceil(placing.width)),
     storeys: heights.storeys,
-    captions: drawCaptions(storeys, heights),
+    captions: drawCaptions(storeys, heights, placing.isLarge ? 108 : 62),
     bays: drawBays(placing, heights),
     plates: hanging.plates,
     devices: hanging.devices,

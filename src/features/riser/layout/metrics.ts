@@ -1,14 +1,14 @@
 /** Measures of the drawing, in its own units: one is a pixel at 100 percent. */
 export const metrics = {
-  margin: { left: 96, right: 12, top: 12, bottom: 34 },
+  margin: { left: 96, leftLarge: 150, right: 12, top: 10, bottom: 28 },
   /** Space left of a bay's wall line to its neighbour's. */
   bayInset: 3,
   bayPad: 8,
   outsidePad: 14,
   /** From one run's way down to the next, while every run has its own tag. */
-  slotPitch: 17.5,
+  slotPitch: 16.9,
   /** The same on a level whose tags are folded into counts. */
-  densePitch: 9.5,
+  densePitch: 8.2,
   /** Runs on a level above which tags are folded. */
   foldOver: 90,
   /** Ends on a job that is laid out more tightly, and the runs on a level above which it then folds. */
@@ -22,7 +22,7 @@ export const metrics = {
   tagUnder: 6,
   voidTop: 9,
   corner: 4,
-  bay: { pxPerFoot: 19, least: 132, most: 236 },
+  bay: { pxPerFoot: 18, pxPerFootLarge: 25, least: 128, most: 290 },
   planPxPerFoot: 5.5,
   plateScale: 0.386,
   densePlateScale: 0.3,

@@ -29,6 +29,8 @@ export interface Placing {
   /** Edges of the building on each storey. */
   readonly edges: readonly { readonly x0: number; readonly x1: number }[]
   readonly folded: readonly boolean[]
+  /** So many runs that everything is drawn to be looked at from farther away. */
+  readonly isLarge: boolean
   readonly width: number
 }
 
@@ -46,6 +48,8 @@ interface Wants {
 }
 
 interface Row {
+  /** The columns that part this storey: those that stand on it or pass it. */
+  readonly parts: readonly number[]
   readonly inside: readonly (readonly RoomNeed[])[]
   readonly outsideLeft: readonly RoomNeed[]
   readonly outsideRight: readonly RoomNeed[]
@@ -61,16 +65,17 @@ export function placeRooms(wants: Wants): Placing {
   const loads = storeys.map((storey) => exitsIn(storey, wants.contents))
   const isLarge = loads.reduce((sum, load) => sum + load, 0) > metrics.largeJob
   const folded = loads.map((load) => load > (isLarge ? metrics.foldOverInLarge : metrics.foldOver))
-  const rows = storeys.map((storey, index) => (storey.kind === 'full' ? rowOf(storey, wants, bands, folded[index]!) : { inside: columns.map(() => []).concat([[]]), outsideLeft: [], outsideRight: [] }))
+  const parts = reaches.map((row) => columns.filter((column) => row[column.index]!.left + row[column.index]!.right > 0).map((column) => column.index))
+  const rows = storeys.map((storey, index) => (storey.kind === 'full' ? rowOf(storey, wants, bands, parts[index]!, folded[index]!) : { parts: [], inside: [], outsideLeft: [], outsideRight: [] }))
   const outer = outerWidths(storeys, rows, columns)
-  const centres = solveColumns(rows, reaches, outer, columns.length, metrics.margin.left + wants.leftExtra)
+  const left = (isLarge ? metrics.margin.leftLarge : metrics.margin.left) + wants.leftExtra
+  const centres = solveColumns(rows, reaches, outer, columns.length, left)
   const placing = { bays: [] as PlacedBay[], slots: new Map<Exit, number>(), centres: new Map<string, number>() }
-  const left = metrics.margin.left + wants.leftExtra
   const own = rows.map((row, index) => (hasRooms(row) ? placeRow(row, storeys[index]!, { centres, reaches: reaches[index]!, outer: outer[index]!, left }, placing) : null))
   const edges = own.map((edge, index) => edge ?? nearestEdge(own, index) ?? { x0: left, x1: left + 320 })
   const width = Math.max(...placing.bays.map((bay) => bay.x1), ...edges.map((edge) => edge.x1 + wants.rightExtra), left + 320) + wall + metrics.margin.right
   const gaps = reaches.map((row) => row.map((each, index) => ({ x0: centres[index]! - each.left, x1: centres[index]! + each.right })))
-  return { ...placing, columns: centres, bands, gaps, edges, folded, width }
+  return { ...placing, columns: centres, bands, gaps, edges, folded, isLarge, width }
 }
 
 const hasRooms = (row: Row) => row.inside.some((needs) => needs.length > 0)
@@ -84,28 +89,31 @@ function nearestEdge(edges: readonly ({ x0: number; x1: number } | null)[], inde
 const exitsIn = (storey: Storey, contents: Contents) => storey.rooms.reduce((sum, room) => sum + room.fixtures.reduce((own, fixture) => own + (contents.exits.get(fixture.key)?.length ?? 0), 0), 0)
 
 /** The rooms of a storey, split at the columns, each with the width it needs. */
-function rowOf(storey: Storey, wants: Wants, bands: readonly ColumnBands[], isDense: boolean): Row {
+function rowOf(storey: Storey, wants: Wants, bands: readonly ColumnBands[], parts: readonly number[], isDense: boolean): Row {
   const indoors = storey.rooms.filter((room) => !room.isOutside || room.racks.length)
   const house = indoors.length ? indoors : storey.rooms
   const middle = house.reduce((sum, room) => sum + room.centre, 0) / Math.max(1, house.length)
   const beside = storey.rooms.filter((room) => !house.includes(room))
   const columnOf = (room: HouseRoom) => wants.columns.find((column) => room.racks.length > 0 && column.racks.some((rack) => rack.rack.roomId === room.room.id))
-  const segmentOf = (room: HouseRoom) => columnOf(room)?.index ?? wants.columns.filter((column) => column.planX <= room.centre).length
+  const segmentOf = (room: HouseRoom) => {
+    const own = columnOf(room)
+    return own ? parts.indexOf(own.index) : parts.filter((index) => wants.columns[index]!.planX <= room.centre).length
+  }
   const need = (room: HouseRoom) => {
     const column = columnOf(room)
     return (pitch: number) => roomNeed(room, wants.contents, pitch, isDense, column ? bands[column.index]!.rackWidth : 0)
   }
-  const segments = Array.from({ length: wants.columns.length + 1 }, (_, index) =>
+  const segments = Array.from({ length: parts.length + 1 }, (_, index) =>
     house.filter((room) => segmentOf(room) === index).sort((a, b) => Number(a.racks.length > 0) - Number(b.racks.length > 0) || a.centre - b.centre),
   )
   const west = beside.filter((room) => room.centre < middle)
   const east = beside.filter((room) => room.centre >= middle)
   const inside = segments.map((rooms, index) => {
-    const all = [...(index === 0 ? west : []), ...rooms, ...(index === wants.columns.length ? east : [])]
+    const all = [...(index === 0 ? west : []), ...rooms, ...(index === parts.length ? east : [])]
     return fitPitch(all.map(need), wants.mark, isDense)
   })
   const of = (rooms: readonly HouseRoom[]) => inside.map((needs) => needs.filter((each) => rooms.includes(each.room)))
-  return { inside: of(house), outsideLeft: of(west).flat(), outsideRight: of(east).flat() }
+  return { parts, inside: of(house), outsideLeft: of(west).flat(), outsideRight: of(east).flat() }
 }
 
 /** Widens rooms of a stretch, each no more than it must, until all its tags find a seat. */
@@ -131,30 +139,33 @@ function fitPitch(needs: readonly ((pitch: number) => RoomNeed)[], mark: Wants['
   }
 }
 
+/** The middle of each column: as far west as all storeys that it parts allow. */
 function solveColumns(rows: readonly Row[], reaches: readonly (readonly { left: number; right: number }[])[], outer: readonly { left: number }[], count: number, margin: number): number[] {
   const centres: number[] = []
   for (let index = 0; index < count; index++) {
-    const from = index === 0 ? margin : centres[index - 1]!
-    const needs = rows.map((row, storey) => {
-      const before = index === 0 ? widthOf(row.outsideLeft) + wall : (reaches[storey]![index - 1]?.right ?? 0)
-      return before + Math.max(widthOf(row.inside[index] ?? []), index === 0 ? outer[storey]!.left : 0) + reaches[storey]![index]!.left
+    const needs = rows.flatMap((row, storey) => {
+      const at = row.parts.indexOf(index)
+      if (at < 0) return []
+      const before = row.parts[at - 1]
+      const from = before === undefined ? margin + widthOf(row.outsideLeft) + wall : centres[before]! + reaches[storey]![before]!.right
+      return [from + Math.max(widthOf(row.inside[at] ?? []), before === undefined ? outer[storey]!.left : 0) + reaches[storey]![index]!.left]
     })
-    centres.push(from + Math.max(0, ...needs))
+    centres.push(Math.max(margin, index ? centres[index - 1]! + 8 : 0, ...needs))
   }
   return centres
 }
 
 /** How wide the outermost stretches are drawn: as the plan has them beside the widest storey, and never under their need. */
 function outerWidths(storeys: readonly Storey[], rows: readonly Row[], columns: readonly Column[]): { left: number; right: number }[] {
-  const last = columns.length
-  const extents = storeys.map((storey) => {
+  const extents = storeys.map((storey, index) => {
     const rooms = storey.rooms.filter((room) => !room.isOutside)
     const min = Math.min(...rooms.map((room) => room.minX))
     const max = Math.max(...rooms.map((room) => room.maxX))
-    return { left: (columns[0]?.planX ?? min) - min, right: max - (columns[last - 1]?.planX ?? min) }
+    const [first, last] = [rows[index]!.parts[0], rows[index]!.parts.at(-1)]
+    return { left: first === undefined ? 0 : columns[first]!.planX - min, right: max - (last === undefined ? min : columns[last]!.planX) }
   })
-  const side = (end: 'left' | 'right', segment: number) => {
-    const needs = rows.map((row) => widthOf(row.inside[segment] ?? []))
+  const side = (end: 'left' | 'right') => {
+    const needs = rows.map((row) => (end === 'right' ? widthOf(row.inside.at(-1) ?? []) : row.parts.length ? widthOf(row.inside[0] ?? []) : 0))
     const widest = Math.max(...needs)
     const reference = Math.max(...extents.map((extent, index) => (needs[index] ? extent[end] : 0)))
     return needs.map((need, index) => {
@@ -164,8 +175,8 @@ function outerWidths(storeys: readonly Storey[], rows: readonly Row[], columns: 
       return widest - width < 30 ? widest : width
     })
   }
-  const left = last ? side('left', 0) : storeys.map(() => 0)
-  const right = side('right', last)
+  const left = side('left')
+  const right = side('right')
   return storeys.map((_, index) => ({ left: left[index]!, right: right[index]! }))
 }
 
@@ -179,7 +190,6 @@ interface RowSpace {
 /** Lays the rooms of a storey out between its columns; returns the edges of the building there. */
 function placeRow(row: Row, storey: Storey, space: RowSpace, placing: { bays: PlacedBay[]; slots: Map<Exit, number>; centres: Map<string, number> }): { x0: number; x1: number } {
   const { centres, reaches, outer } = space
-  const last = centres.length
   const lay = (needs: readonly RoomNeed[], from: number, to: number) => {
     const spare = Math.max(0, to - from - widthOf(needs))
     const weight = needs.reduce((sum, need) => sum + need.room.maxX - need.room.minX, 0) || 1
@@ -195,8 +205,9 @@ function placeRow(row: Row, storey: Storey, space: RowSpace, placing: { bays: Pl
   let x0 = Infinity
   let x1 = -Infinity
   row.inside.forEach((needs, segment) => {
-    const before = segment === 0 ? null : centres[segment - 1]! + Math.max(reaches[segment - 1]!.right, 0)
-    const after = segment === last ? null : centres[segment]! - reaches[segment]!.left
+    const [west, east] = [row.parts[segment - 1], row.parts[segment]]
+    const before = west === undefined ? null : centres[west]! + reaches[west]!.right
+    const after = east === undefined ? null : centres[east]! - reaches[east]!.left
     const from = before ?? (after === null ? space.left + wall + widthOf(row.outsideLeft) : after - (outer.left || widthOf(needs)))
     const to = after ?? from + (outer.right || widthOf(needs))
     lay(needs, from, to)
