@@ -53,12 +53,13 @@ function differenceOf(before: JobRecord, after: JobRecord): Update | undefined {
 }
 
 function mergeUpdate(updated: Map<string, Update>, key: string, update: Update) {
-  const fields: Record<string, FieldChange> = { ...updated.get(key)?.fields }
+  const fields = new Map<string, FieldChange>(Object.entries(updated.get(key)?.fields ?? {}))
   for (const [field, [before, after]] of Object.entries(update.fields)) {
-    const start = field in fields ? fields[field]![0] : before
-    if (same(start, after)) delete fields[field]
-    else fields[field] = [start, after]
+    const known = fields.get(field)
+    const start = known ? known[0] : before
+    if (same(start, after)) fields.delete(field)
+    else fields.set(field, [start, after])
   }
-  if (Object.keys(fields).length) updated.set(key, { kind: update.kind, id: update.id, fields })
+  if (fields.size) updated.set(key, { kind: update.kind, id: update.id, fields: Object.fromEntries(fields) })
   else updated.delete(key)
 }

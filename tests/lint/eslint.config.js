@@ -55,7 +55,7 @@ export default tseslint.config(
       'no-undef': 'off',
       'vue/max-attributes-per-line': 'off',
       'vue/singleline-html-element-content-newline': 'off',
-      'vue/html-self-closing': ['error', { html: { void: 'always', normal: 'always' } }],
+      'vue/html-self-closing': ['error', { html: { void: 'any', normal: 'always' } }],
       'vue/multi-word-component-names': 'off',
       'vue/require-default-prop': 'off',
       'vue/attributes-order': 'off',

@@ -1,4 +1,4 @@
-import { reactive, watch } from 'vue'
+import { ref, watch, type Ref } from 'vue'
 import { labelSheetSchema, type LabelSheet } from '../../../shared/api/exports.ts'
 
 const key = 'mudring.labels'
@@ -16,8 +16,8 @@ function remembered(): LabelWish {
 }
 
 /** Stock, copies and what this printer sets off: remembered on this device, because they belong to its printer. */
-export function useLabelWish(): { wish: LabelWish } {
-  const wish = reactive(remembered())
-  watch(wish, (now) => localStorage.setItem(key, JSON.stringify(now)))
-  return { wish }
+export function useLabelWish(): Ref<LabelWish> {
+  const wish = ref(remembered())
+  watch(wish, (now) => localStorage.setItem(key, JSON.stringify(now)), { deep: true })
+  return wish
 }

@@ -1,4 +1,4 @@
-import { computed, reactive, ref } from 'vue'
+import { computed, ref } from 'vue'
 import type { Severity } from '../../../shared/checks/finding.ts'
 import type { Stage } from '../../../shared/derive/facts.ts'
 import { compareLabels, scheduleRows, type ScheduleRow } from '../../../shared/views/scheduleRows.ts'
@@ -33,7 +33,7 @@ const noFilter = (): ScheduleFilter => ({ text: '', level: '', room: '', cable: 
 /** The schedule as somebody looks at it: filtered, sorted, grouped. */
 export function useSchedule() {
   const store = useJobStore()
-  const filter = reactive(noFilter())
+  const filter = ref(noFilter())
   const grouping = ref<Grouping>('room')
   const sortBy = ref('label')
   const descending = ref(false)
@@ -45,11 +45,11 @@ export function useSchedule() {
   const lines = computed<ScheduleLine[]>(() =>
     groups.value.flatMap((group) => [...(grouping.value === 'none' ? [] : [{ group }]), ...(folded.value.has(group.key) ? [] : group.rows.map((row) => ({ row })))]),
   )
-  const isFiltered = computed(() => Object.values(filter).some(Boolean))
+  const isFiltered = computed(() => Object.values(filter.value).some(Boolean))
   return { filter, grouping, sortBy, descending, folded, columns, all, rows, groups, lines, isFiltered, clear, sort, fold }
 
   function clear() {
-    Object.assign(filter, noFilter())
+    filter.value = noFilter()
   }
   function sort(id: string) {
     descending.value = sortBy.value === id ? !descending.value : false
@@ -62,12 +62,12 @@ export function useSchedule() {
   }
 
   function passes(row: ScheduleRow): boolean {
-    const text = filter.text.trim().toLowerCase()
+    const text = filter.value.text.trim().toLowerCase()
     return (
       (!text || [row.label, row.cable, row.room, row.plate, row.device, row.rackPort, row.bundle].some((each) => each.toLowerCase().includes(text))) &&
-      (!filter.level || row.level === filter.level) && (!filter.room || row.room === filter.room) && (!filter.cable || row.cable === filter.cable) &&
-      (!filter.stage || row.stage === filter.stage) && (!filter.bundle || row.bundle === filter.bundle) &&
-      (!filter.finding || (filter.finding === 'any' ? row.severity !== null : row.severity === filter.finding))
+      (!filter.value.level || row.level === filter.value.level) && (!filter.value.room || row.room === filter.value.room) && (!filter.value.cable || row.cable === filter.value.cable) &&
+      (!filter.value.stage || row.stage === filter.value.stage) && (!filter.value.bundle || row.bundle === filter.value.bundle) &&
+      (!filter.value.finding || (filter.value.finding === 'any' ? row.severity !== null : row.severity === filter.value.finding))
     )
   }
   function sorted(list: ScheduleRow[]): ScheduleRow[] {

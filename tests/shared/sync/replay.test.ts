@@ -13,7 +13,7 @@ const house = () => buildDoc(...smallHouse())
 
 describe('replay', () => {
   it('goes on after a refusal, and says which command it was', () => {
-    const bad = { id: 'bad', verb: 'run.drop', args: { ids: ['nope'], reason: 'x' }, madeAt: 0 } as const
+    const bad: Command = { id: 'bad', verb: 'run.drop', args: { ids: ['nope'], reason: 'x' }, madeAt: 0 }
     const played = replay(house(), [rename('c1', 'Deck'), bad, rename('c2', 'Terrace')], as('designer'))
     expect(played.refused.map(({ command, error }) => [command.id, error.code])).toEqual([['bad', 'not_found']])
     expect(find(played.doc, 'room', 'pat')?.name).toBe('Terrace')
