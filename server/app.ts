@@ -21,6 +21,7 @@ export function createApp(deps: AppDeps, routes: readonly Route[] = buildRoutes(
   app.set('x-powered-by', false)
   if (deps.secure) app.set('trust proxy', 1)
   app.use(requestLog(deps))
+  app.use(lastAnswers(deps))
   app.use(securityHeaders(deps))
   app.use('/api', neverCached, sameOrigin, sessions(deps), express.json({ limit: bodyLimitBytes, strict: true }))
   registerRoutes(app, routes, deps)
@@ -31,6 +32,14 @@ export function createApp(deps: AppDeps, routes: readonly Route[] = buildRoutes(
   assertOnlyTable(app, routes)
   return app
 }
+
+/** While the server stops, each answer is the last on its connection, so that nobody asks on one that is about to close. */
+const lastAnswers =
+  ({ closing }: Pick<AppDeps, 'closing'>): RequestHandler =>
+  (_request, response, next) => {
+    if (closing.aborted) response.setHeader('Connection', 'close')
+    next()
+  }
 
 const neverCached: RequestHandler = (_request, response, next) => {
   response.setHeader('Cache-Control', 'no-store')

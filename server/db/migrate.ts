@@ -4,6 +4,12 @@ import { readSteps, type Step } from './migrations.ts'
 
 /** Errors of a statement whose work stands already: table, column, key, foreign key or check there; column or key gone. */
 const doneAlready = new Set([1050, 1060, 1061, 1826, 1051, 1091])
+/** MariaDB says of a foreign key that is there only that the table cannot be made, and InnoDB's number for a duplicate. */
+const cannotCreate = 1005
+const isDoneAlready = (error: unknown) => {
+  const errno = errnoOf(error) ?? 0
+  return doneAlready.has(errno) || (errno === cannotCreate && String(error).includes('errno: 121'))
+}
 
 /**
  * Brings the schema up to this version and no further. What has run is noted statement by statement, so that a
@@ -53,7 +59,7 @@ async function run(connection: mysql.Connection, { migration, position, statemen
   try {
     await connection.query(statement)
   } catch (error) {
-    if (!(isFirst && doneAlready.has(errnoOf(error) ?? 0))) throw new Error(`The migration ${migration} stopped at its statement ${position + 1}`, { cause: error })
+    if (!(isFirst && isDoneAlready(error))) throw new Error(`The migration ${migration} stopped at its statement ${position + 1}`, { cause: error })
   }
   await connection.query('INSERT INTO schema_steps (migration, position, digest) VALUES (?, ?, ?)', [migration, position, digest])
   await connection.commit()

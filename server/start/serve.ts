@@ -1,5 +1,6 @@
 import { setMaxListeners } from 'node:events'
 import { createServer, type Server } from 'node:http'
+import { setTimeout as pause } from 'node:timers/promises'
 import { createApp } from '../app.ts'
 import { durabilityFaults } from '../db/assertDurable.ts'
 import { openDatabase, type Database } from '../db/client.ts'
@@ -61,13 +62,19 @@ const listen = (server: Server, port: number) =>
     server.listen(port, '127.0.0.1', () => done(server))
   })
 
-/** Takes nothing new, lets what runs finish, and after eight seconds cuts off what does not. */
-const closeServer = (server: Server) =>
-  new Promise<void>((done) => {
-    const cut = setTimeout(() => server.closeAllConnections(), 8000)
+/** How long requests that are on their way are still taken; each answer then says that the connection ends with it. */
+const graceMs = 300
+/** How long what runs may take to finish. */
+const patienceMs = 8000
+
+/** Lets what was asked finish, takes nothing new, and cuts off what does not end. */
+async function closeServer(server: Server): Promise<void> {
+  await pause(graceMs)
+  await new Promise<void>((done) => {
+    const cut = setTimeout(() => server.closeAllConnections(), patienceMs)
     server.close(() => {
       clearTimeout(cut)
       done()
     })
-    server.closeIdleConnections()
   })
+}

@@ -1,6 +1,7 @@
 import { createHash } from 'node:crypto'
 import { AppError } from '../../../shared/errors.ts'
 import type { Db } from '../../db/client.ts'
+import { retried } from '../../db/transaction.ts'
 import { clearAttempts, giveBackAttempt, takeAttempt } from './sessionRepo.ts'
 
 const windowMs = 15 * 60 * 1000
@@ -27,13 +28,13 @@ export async function countAttempt(db: Db, email: string, address: string): Prom
     email: subjectOf('email', email),
   }
   for (const kind of ['pair', 'address', 'email'] as const) {
-    const { attempts, windowEnds } = await takeAttempt(db, subjects[kind], now, windowMs)
+    const { attempts, windowEnds } = await retried(() => takeAttempt(db, subjects[kind], now, windowMs))
     if (attempts > mostAttempts[kind]) throw tooMany(Math.max(1, Math.ceil((windowEnds - now) / 1000)))
   }
   return async () => {
-    await clearAttempts(db, subjects.pair)
-    await giveBackAttempt(db, subjects.address)
-    await giveBackAttempt(db, subjects.email)
+    await retried(() => clearAttempts(db, subjects.pair))
+    await retried(() => giveBackAttempt(db, subjects.address))
+    await retried(() => giveBackAttempt(db, subjects.email))
   }
 }
 

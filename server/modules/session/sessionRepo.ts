@@ -49,7 +49,7 @@ export async function readSignedIn(db: Session, companyId: string, memberId: str
 }
 
 
-/** One who tries, by what: the table of attempts names nobody, so this is a hash. */
+/** Attempts of one who tries, known by a hash: the table names nobody. */
 export interface AttemptCount {
   readonly attempts: number
   readonly windowEnds: number
@@ -57,17 +57,15 @@ export interface AttemptCount {
 
 /**
  * Counts an attempt before it is made and tells how many that makes within the window; one that has ended begins anew.
- * Counting is one statement, so that a burst of attempts at once cannot slip through between reading and writing.
+ * It is one statement, so that of a burst of attempts each gets a number of its own.
  */
 export async function takeAttempt(db: Session, subject: string, now: number, windowMs: number): Promise<AttemptCount> {
-  const hasEnded = sql`${signInAttempts.windowEnds} <= ${now}`
-  await db
-    .insert(signInAttempts)
-    .values({ subject, attempts: 1, windowEnds: now + windowMs })
-    // MariaDB assigns from left to right: the count is decided before the window moves.
-    .onDuplicateKeyUpdate({ set: { attempts: sql`if(${hasEnded}, 1, ${signInAttempts.attempts} + 1)`, windowEnds: sql`if(${hasEnded}, ${now + windowMs}, ${signInAttempts.windowEnds})` } })
-  const [row] = await db.select().from(signInAttempts).where(eq(signInAttempts.subject, subject))
-  return row ?? { attempts: 1, windowEnds: now + windowMs }
+  // MariaDB assigns from left to right: the count is decided before the window moves.
+  const [rows] = (await db.execute(sql`
+    insert into sign_in_attempts (subject, attempts, window_ends) values (${subject}, 1, ${now + windowMs})
+    on duplicate key update attempts = if(window_ends <= ${now}, 1, attempts + 1), window_ends = if(window_ends <= ${now}, ${now + windowMs}, window_ends)
+    returning attempts, window_ends as windowEnds`)) as unknown as [AttemptCount[]]
+  return { attempts: Number(rows[0]!.attempts), windowEnds: Number(rows[0]!.windowEnds) }
 }
 /** Gives one attempt back: it fitted. */
 export async function giveBackAttempt(db: Session, subject: string): Promise<void> {

@@ -1,4 +1,5 @@
 import { AppError } from '../../../shared/errors.ts'
+import { retried } from '../../db/transaction.ts'
 import type { PublicContext, SignedIn } from '../../http/routeTable.ts'
 import { countAttempt } from './attempts.ts'
 import { passphraseFits } from './passphrase.ts'
@@ -20,6 +21,6 @@ export async function signIn(
     throw new AppError('unauthenticated', 'That e-mail address and passphrase do not go together')
   }
   await takeBack()
-  await deleteEndedSessions(db, Date.now())
+  await retried(() => deleteEndedSessions(db, Date.now()))
   return { companyId: member.companyId, id: member.id, name: member.name, email: member.email, role: member.role }
 }
