@@ -5,7 +5,7 @@ import { ohmText, speakerLoad, type SpeakerLoad } from '../derive/speakerLoad.ts
 import type { Device, DeviceModel, Terminal } from '../model/device.ts'
 import type { Run } from '../model/run.ts'
 import { formatNumber } from '../units.ts'
-import { defineCheck, type Draft } from './define.ts'
+import { defineCheck, setBy, type Draft } from './define.ts'
 
 interface Fed {
   readonly run: Run
@@ -85,7 +85,8 @@ function untapped(device: Device, { terminal, fed }: Channel): Draft[] {
 }
 
 function overTapped(reader: JobReader, device: Device, model: DeviceModel, channels: readonly Channel[]): Draft[] {
-  const { lineLoadShare } = reader.job().limits
+  const { limits } = reader.job()
+  const { lineLoadShare } = limits
   const tapsOf = (channel: Channel) => channel.fed.reduce((sum, each) => sum + (each.load.totalW ?? 0), 0)
   const draft = (name: string, taps: number, power: number): Draft[] => {
     const share = lineLoadPercent(taps, power)
@@ -97,7 +98,7 @@ function overTapped(reader: JobReader, device: Device, model: DeviceModel, chann
         sentence: `Taps of ${formatNumber(taps, taps % 1 ? 1 : 0)} W on ${name} of ${formatNumber(power, 0)} W are ${formatNumber(share, 0)} %; the limit is ${formatNumber(lineLoadShare, 0)} %.`,
         advice: 'Choose lower taps, or a larger amplifier.',
         figure: { value: share, unit: '%', text: `${formatNumber(share, 0)} %` },
-        limit: { value: lineLoadShare, unit: '%', text: `${formatNumber(lineLoadShare, 0)} %`, setBy: 'job' },
+        limit: { value: lineLoadShare, unit: '%', text: `${formatNumber(lineLoadShare, 0)} %`, setBy: setBy(limits, 'lineLoadShare') },
         basis: `sum of taps ${formatNumber(taps, 1)} W / ${formatNumber(power, 0)} W`,
         figures: [name, taps, power, lineLoadShare].join('|'),
       },

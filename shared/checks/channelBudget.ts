@@ -1,7 +1,9 @@
 import type { JobReader } from '../derive/jobReader.ts'
-import { endRoom, rackOf, sourceEnd, farEnd } from '../derive/ends.ts'
+import { endRoom, farEnd, rackOf, sourceEnd, terminalAt } from '../derive/ends.ts'
 import { feedOf } from '../derive/feedOf.ts'
 import { countWord, pairsOf, speakerLoad } from '../derive/speakerLoad.ts'
+import { isSpeakerSignal } from '../derive/speakersReached.ts'
+import type { CableType } from '../model/cableType.ts'
 import type { Device } from '../model/device.ts'
 import type { Rack } from '../model/place.ts'
 import type { Run } from '../model/run.ts'
@@ -69,18 +71,40 @@ function demandOf(reader: JobReader, run: Run, place: string): Demand[] {
   const near = run[source]
   // Said once, at the place the signal comes from; a run that only comes back to the rack asks for nothing more.
   const isHere = near && rackOf(reader, near) !== undefined && ('rackId' in near ? `rack:${near.rackId}` : 'deviceId' in near ? `device:${near.deviceId}` : '') === place
-  const { load } = isHere ? speakerLoad(reader, run) : { load: null }
-  if (!load) return []
+  const channels = isHere ? channelsAsked(reader, run, type) : 0
+  if (channels === 0) return []
   const room = endRoom(reader, run[farEnd(source)])
-  return [{ run, channels: load.lineVoltageV === null ? pairsOf(type) : 1, roomId: room?.id ?? '', roomName: room?.name ?? '', isLanded: feedOf(reader, run) !== undefined }]
+  return [{ run, channels, roomId: room?.id ?? '', roomName: room?.name ?? '', isLanded: feedOf(reader, run) !== undefined }]
 }
 
-/** Which runs go without when channels run out: those that land on a channel keep it, then the rooms that ask for most. */
+/** Channels that a run asks for: by its load; where no speaker is drawn yet, by the speaker jack or terminal it goes to. */
+function channelsAsked(reader: JobReader, run: Run, type: CableType): number {
+  const { load, missing } = speakerLoad(reader, run)
+  if (load) return load.lineVoltageV === null ? pairsOf(type) : 1
+  const source = sourceEnd(reader, run)
+  const [near, far] = [run[source], run[farEnd(source)]]
+  const from = near && 'deviceId' in near ? terminalAt(reader, near.deviceId, near.terminal)?.terminal.signal : undefined
+  if (from !== undefined && !isSpeakerSignal(from)) return 0
+  const isForSpeakers = missing !== null || isSpeakerEnd(reader, far)
+  return !isForSpeakers ? 0 : from === 'speaker-line' ? 1 : pairsOf(type)
+}
+
+function isSpeakerEnd(reader: JobReader, end: Run['b']): boolean {
+  if (!end || 'rackId' in end) return false
+  if ('plateId' in end) return reader.find('plate', end.plateId)?.jacks.find((jack) => jack.id === end.jackId)?.connector === 'speaker-pair'
+  const at = terminalAt(reader, end.deviceId, end.terminal)
+  return at !== undefined && isSpeakerSignal(at.terminal.signal)
+}
+
+/**
+ * Which runs go without when channels run out: a room with many keeps its own and the smaller ones give way, as a second
+ * zone does on a receiver; in a room those go first that no cord is drawn for.
+ */
 function leftOver(asked: readonly Demand[], offered: number): Demand[] {
   const byRoom = new Map<string, number>()
   for (const { roomId, channels } of asked) byRoom.set(roomId, (byRoom.get(roomId) ?? 0) + channels)
   const order = [...asked].sort(
-    (a, b) => Number(b.isLanded) - Number(a.isLanded) || byRoom.get(b.roomId)! - byRoom.get(a.roomId)! || (a.roomId < b.roomId ? -1 : a.roomId > b.roomId ? 1 : 0) || a.run.serial - b.run.serial,
+    (a, b) => byRoom.get(b.roomId)! - byRoom.get(a.roomId)! || (a.roomId < b.roomId ? -1 : a.roomId > b.roomId ? 1 : 0) || Number(b.isLanded) - Number(a.isLanded) || a.run.serial - b.run.serial,
   )
   let left = offered
   const silent: Demand[] = []

@@ -1,10 +1,11 @@
 import { withinLimit } from '../calc/speaker/load.ts'
-import { cordsOn } from '../derive/ends.ts'
+import { cordsOn, deviceBeyond } from '../derive/ends.ts'
 import type { JobReader } from '../derive/jobReader.ts'
+import type { Limits } from '../model/limits.ts'
 import { factsOf } from '../derive/runFacts.ts'
 import type { Run, RunEnd } from '../model/run.ts'
 import { formatLength } from '../units.ts'
-import { defineCheck, lengthText, type Draft } from './define.ts'
+import { defineCheck, lengthText, setBy, type Draft } from './define.ts'
 
 export const dataLength = defineCheck({
   id: 'dataLength',
@@ -20,25 +21,32 @@ export const dataLength = defineCheck({
   look: (reader, run) => {
     const { length } = factsOf(reader, run)
     const type = reader.find('cableType', run.cableTypeId)
-    if (!length || type?.family !== 'twisted-pair') return []
+    if (!length || type?.family !== 'twisted-pair' || !mayCarryData(reader, run)) return []
     const { limits } = reader.job()
     const cordsMm = cordLength(reader, run)
-    const draft = (severity: Draft['severity'], what: string, valueMm: number, limitMm: number): Draft => ({
+    const draft = (severity: Draft['severity'], what: string, valueMm: number, key: keyof Limits & `data${string}`): Draft => ({
       severity,
       aboutName: run.label,
-      sentence: `${what} is ${lengthText(reader, valueMm)}; the limit is ${lengthText(reader, limitMm)}.`,
+      sentence: `${what} is ${lengthText(reader, valueMm)}; the limit is ${lengthText(reader, limits[key])}.`,
       advice: severity === 'stop' ? 'Move the far end nearer, put a switch between, or use fiber.' : 'Check the route before it is pulled: slack and detours count.',
       figure: { value: valueMm, unit: 'mm', text: lengthText(reader, valueMm) },
-      limit: { value: limitMm, unit: 'mm', text: lengthText(reader, limitMm), setBy: 'job' },
+      limit: { value: limits[key], unit: 'mm', text: lengthText(reader, limits[key]), setBy: setBy(limits, key) },
       basis: `${length.basis} length ${lengthText(reader, length.totalMm)}, slack included${cordsMm ? `; cords ${lengthText(reader, cordsMm)}` : ''}`,
-      figures: [length.totalMm, cordsMm, limitMm].join('|'),
+      figures: [length.totalMm, cordsMm, limits[key]].join('|'),
     })
-    if (!withinLimit(length.totalMm, limits.dataLinkMm)) return [draft('stop', 'The run', length.totalMm, limits.dataLinkMm)]
-    if (!withinLimit(length.totalMm + cordsMm, limits.dataChannelMm)) return [draft('stop', 'The run with its cords', length.totalMm + cordsMm, limits.dataChannelMm)]
-    if (!withinLimit(length.totalMm, limits.dataLinkCautionMm)) return [draft('caution', 'The run', length.totalMm, limits.dataLinkCautionMm)]
+    if (!withinLimit(length.totalMm, limits.dataLinkMm)) return [draft('stop', 'The run', length.totalMm, 'dataLinkMm')]
+    if (!withinLimit(length.totalMm + cordsMm, limits.dataChannelMm)) return [draft('stop', 'The run with its cords', length.totalMm + cordsMm, 'dataChannelMm')]
+    if (!withinLimit(length.totalMm, limits.dataLinkCautionMm)) return [draft('caution', 'The run', length.totalMm, 'dataLinkCautionMm')]
     return []
   },
 })
+
+/** Twisted pair is also laid for keypads, sensors and shades, which no data limit holds for: where a device says so, it is believed. */
+const mayCarryData = (reader: JobReader, run: Run) =>
+  (['a', 'b'] as const).every((end) => {
+    const signal = deviceBeyond(reader, run[end])?.terminal.signal
+    return signal === undefined || signal === 'ethernet' || signal === 'video-link'
+  })
 
 /** The cords at both ends together, mm; the longest where an end has several. */
 function cordLength(reader: JobReader, run: Run): number {

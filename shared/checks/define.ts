@@ -1,10 +1,10 @@
 import type { JobReader } from '../derive/jobReader.ts'
 import type { Acceptance } from '../model/fieldRecord.ts'
-import type { Limits } from '../model/limits.ts'
+import { defaultLimits, type Limits } from '../model/limits.ts'
 import type { RecordOf } from '../model/record.ts'
 import { isStruck } from '../model/struck.ts'
 import { formatLength, type LengthUnit } from '../units.ts'
-import type { Finding, Severity, Tier } from './finding.ts'
+import type { Finding, Limit, Severity, Tier } from './finding.ts'
 
 /** Kinds that checks look at. */
 export const checkedKinds = ['run', 'cord', 'device', 'room'] as const
@@ -61,6 +61,9 @@ function acceptanceOf(reader: JobReader, check: string, record: { kind: string; 
   const last = holds.at(-1)
   return last ? { id: last.id, reason: last.reason, byId: last.byId, at: last.at } : null
 }
+
+/** Who set a limit: the product, as long as the job has not changed it. */
+export const setBy = (limits: Limits, key: keyof Limits): Limit['setBy'] => (limits[key] === defaultLimits[key] ? 'default' : 'job')
 
 /** A length in the job's unit, whole, for sentences. */
 export const lengthText = (reader: JobReader, mm: number): string => formatLength(mm, reader.job().lengthUnit, { as: 'whole' })

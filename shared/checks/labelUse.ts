@@ -1,3 +1,4 @@
+import { lengthOf } from '../derive/lengthOf.ts'
 import type { Run } from '../model/run.ts'
 import { defineCheck } from './define.ts'
 
@@ -11,17 +12,20 @@ export const labelUse = defineCheck({
   limits: () => [{ severity: 'stop', text: 'two alike' }],
   look: (reader, run) => {
     const same = reader.under<Run>(`label ${run.label.toUpperCase()}`)
-    const first = [...same].sort((a, b) => a.serial - b.serial)[0]
-    if (same.length < 2 || first?.id === run.id) return []
+    if (same.length < 2) return []
+    // The one that is printed keeps its label; of several such, the oldest.
+    const isPrinted = (each: Run) => lengthOf(reader, each).said.printed
+    const [first] = [...same].sort((a, b) => Number(isPrinted(b)) - Number(isPrinted(a)) || a.serial - b.serial)
+    if (first?.id === run.id) return []
     return [
       {
         severity: 'stop',
         aboutName: run.label,
         sentence: `${same.length} runs are labelled ${run.label}.`,
-        advice: 'Give this one a label of its own before it is printed.',
+        advice: isPrinted(run) ? 'Both are printed: strike out the print of one, and label it anew.' : 'Give this one a label of its own before it is printed.',
         basis: `${same.length} runs carry this label`,
         figures: [run.label, same.length].join('|'),
-        remedy: { label: 'Label it by the pattern', intent: { verb: 'run.relabel', args: { ids: [run.id] } } },
+        remedy: isPrinted(run) ? null : { label: 'Label it by the pattern', intent: { verb: 'run.relabel', args: { ids: [run.id] } } },
       },
     ]
   },

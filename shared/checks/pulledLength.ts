@@ -17,26 +17,30 @@ export const pulledLength = defineCheck({
   tier: 'practice',
   source: 'Marks are good to two marks; over twice the drawn length and 15 m more is doubted (common practice, no source)',
   about: 'run',
-  limits: () => [{ severity: 'caution', text: 'marks that cannot be true' }],
+  limits: () => [
+    { severity: 'caution', text: 'marks that cannot be true' },
+    { severity: 'note', text: 'far from the drawing' },
+  ],
   look: (reader, run) => {
     const { said, length } = factsOf(reader, run)
     const pull = said.markedPull
     const type = reader.find('cableType', run.cableTypeId)
     if (!pull || !type) return []
     const drawn = length?.drawn ?? null
+    const putUpMm = Math.max(...type.putUps.map((each) => each.lengthMm))
     const doubts = markDoubts(
       { start: pull.markA!, end: pull.markB!, unit: pull.markUnit, counter: fiveDigitCounter },
-      { leastMm: drawn && drawn.totalMm - drawn.slackAMm - drawn.slackBMm, estimateMm: drawn?.totalMm ?? null, putUpMm: Math.max(...type.putUps.map((each) => each.lengthMm)) },
+      { leastMm: drawn && drawn.totalMm - drawn.slackAMm - drawn.slackBMm, estimateMm: drawn?.totalMm ?? null, putUpMm },
     )
     const [worst] = doubts ?? []
     if (!worst) return []
     return [
       {
-        severity: worst === 'shorter than the way' ? 'note' : 'caution',
+        severity: worst === 'same mark' || worst === 'longer than the put-up' ? 'caution' : 'note',
         aboutName: run.label,
         sentence: `${words[worst]}: ${pull.markA} and ${pull.markB} ${pull.markUnit}${drawn ? `; ${lengthText(reader, drawn.totalMm)} is drawn` : ''}.`,
         advice: 'Read the marks again, or strike the pull out and record it anew.',
-        basis: `length = |${pull.markB} - ${pull.markA}| ${pull.markUnit}, the counter rolling over at 100,000`,
+        basis: `length = |${pull.markB} - ${pull.markA}| ${pull.markUnit}, the counter rolling over at 100,000; longest put-up of ${type.code} ${lengthText(reader, putUpMm)}`,
         figures: [pull.id, drawn?.totalMm ?? ''].join('|'),
       },
     ]

@@ -1,9 +1,9 @@
-import { cordsOn, terminalAt } from '../derive/ends.ts'
+import { deviceBeyond, terminalAt, type TerminalAt } from '../derive/ends.ts'
 import type { JobReader } from '../derive/jobReader.ts'
 import type { CableFamily } from '../model/cableType.ts'
-import type { Signal, Terminal } from '../model/device.ts'
+import type { Signal } from '../model/device.ts'
 import type { Connector } from '../model/place.ts'
-import type { EndName, Run, RunEnd } from '../model/run.ts'
+import type { RunEnd } from '../model/run.ts'
 import { defineCheck, type Draft } from './define.ts'
 import { endWords } from './endWords.ts'
 
@@ -34,7 +34,7 @@ const fits: Record<CableFamily, readonly Connector[]> = {
 export const signalMatch = defineCheck({
   id: 'signalMatch',
   title: 'Signal and direction',
-  what: 'That a run joins terminals of one signal, an output to an input, on jacks that take its cable',
+  what: 'That a run joins terminals of one signal, an output to an input, on jacks and ports that take its cable',
   tier: 'practice',
   source: 'What a cable is used for and which jack it fits: common practice, no source',
   about: 'run',
@@ -44,43 +44,56 @@ export const signalMatch = defineCheck({
     if (!type) return []
     const stop = (sentence: string, advice: string): Draft => ({ severity: 'stop', aboutName: run.label, sentence, advice, basis: `${type.code} is ${type.family}`, figures: [type.family, sentence].join('|') })
     for (const end of [run.a, run.b]) {
-      const wrong = wrongAt(reader, end, type.family)
-      if (wrong) return [stop(`${type.code} does not belong on ${endWords(reader, end)}, which takes ${wrong}.`, 'Choose another port, or another cable.')]
+      const other = wrongAt(reader, end, type.family)
+      if (other) return [stop(`${type.code} does not belong on ${endWords(reader, end)}, which takes ${other}.`, 'Choose another port, or another cable.')]
     }
-    const a = beyond(reader, run, 'a')
-    const b = beyond(reader, run, 'b')
-    if (!a || !b) return []
-    if (a.terminal.signal !== b.terminal.signal) return [stop(`${a.name} is ${a.terminal.signal}, ${b.name} is ${b.terminal.signal}.`, 'Join terminals of one signal.')]
-    if (a.terminal.direction === b.terminal.direction && a.terminal.direction !== 'both')
-      return [stop(`${a.name} and ${b.name} both ${a.terminal.direction === 'out' ? 'give out' : 'take in'}.`, 'Join an output to an input.')]
-    return []
+    const a = deviceBeyond(reader, run.a)
+    const b = deviceBeyond(reader, run.b)
+    const wrong = a && b && mismatch(a, b)
+    return wrong ? [stop(wrong.sentence, wrong.advice)] : []
   },
 })
+
+export const cordMatch = defineCheck({
+  id: 'cordMatch',
+  title: 'Cords and signals',
+  what: 'That a cord between two devices joins terminals of one signal, an output to an input; a panel passes on whatever fits it',
+  tier: 'practice',
+  source: 'What a terminal gives or takes, as its model states',
+  about: 'cord',
+  limits: () => [{ severity: 'stop', text: 'wrong signal or direction' }],
+  look: (reader, cord) => {
+    const [a, b] = [cord.a, cord.b].map((end) => ('deviceId' in end ? terminalAt(reader, end.deviceId, end.terminal) : undefined))
+    if (!a || !b || a.category === 'panel' || b.category === 'panel') return []
+    const wrong = mismatch(a, b)
+    return wrong ? [{ severity: 'stop', aboutName: `${a.device.name} to ${b.device.name}`, sentence: wrong.sentence, advice: wrong.advice, basis: `${a.terminal.name}: ${a.terminal.signal}, ${a.terminal.direction}; ${b.terminal.name}: ${b.terminal.signal}, ${b.terminal.direction}`, figures: wrong.sentence }] : []
+  },
+})
+
+/** What is wrong with two terminals joined; undefined: nothing. */
+function mismatch(a: TerminalAt, b: TerminalAt): { sentence: string; advice: string } | undefined {
+  const name = ({ device, terminal }: TerminalAt) => `${device.name}, ${terminal.name.toLowerCase()},`
+  if (a.terminal.signal !== b.terminal.signal) return { sentence: `${name(a)} carries ${signalWords[a.terminal.signal]}; ${name(b)} carries ${signalWords[b.terminal.signal]}.`, advice: 'Join terminals of one signal.' }
+  if (a.terminal.direction !== b.terminal.direction || a.terminal.direction === 'both') return undefined
+  return { sentence: `${name(a)} and ${name(b).slice(0, -1)} both ${a.terminal.direction === 'out' ? 'give out' : 'take in'}.`, advice: 'Join an output to an input.' }
+}
+
+const jackWords: Record<Connector, string> = {
+  modular: 'twisted pair', coax: 'coax', 'speaker-pair': 'speaker cable', fibre: 'fiber', control: 'control cable', power: 'power cable', keypad: 'keypad cable', line: 'line-level cable', hdmi: 'a video cable', usb: 'a USB cable', bare: 'bare cable',
+}
+
+const signalWords: Record<Signal, string> = {
+  speaker: 'a loudspeaker signal', 'speaker-line': 'a constant-voltage line', line: 'line level', ethernet: 'network', video: 'video', 'video-link': 'an extender’s link', rf: 'antenna or cable television',
+  usb: 'USB', control: 'control', bus: 'a bus', sensor: 'a sensor loop', power: 'power', fibre: 'light in fiber',
+}
 
 /** What a jack or terminal takes instead; undefined: it takes this family. */
 function wrongAt(reader: JobReader, end: RunEnd | null, family: CableFamily): string | undefined {
   if (!end || 'rackId' in end) return undefined
   if ('plateId' in end) {
     const jack = reader.find('plate', end.plateId)?.jacks.find((each) => each.id === end.jackId)
-    return jack && !fits[family].includes(jack.connector) ? `a ${jack.connector} cable` : undefined
+    return jack && !fits[family].includes(jack.connector) ? jackWords[jack.connector] : undefined
   }
   const at = terminalAt(reader, end.deviceId, end.terminal)
-  return at && !carries[family].includes(at.terminal.signal) ? at.terminal.signal : undefined
-}
-
-/** The device's terminal that an end comes to: itself, or the one beyond a jack's or panel's cord. */
-function beyond(reader: JobReader, run: Run, name: EndName): { terminal: Terminal; name: string } | undefined {
-  const end = run[name]
-  if (!end || 'rackId' in end) return undefined
-  if ('deviceId' in end) {
-    const at = terminalAt(reader, end.deviceId, end.terminal)
-    if (!at) return undefined
-    if (at.category !== 'panel') return { terminal: at.terminal, name: at.device.name }
-  }
-  const front = 'plateId' in end ? (end.jackId === null ? null : { plateId: end.plateId, jackId: end.jackId }) : end.terminal === null ? null : { deviceId: end.deviceId, terminal: end.terminal }
-  for (const { far } of front ? cordsOn(reader, front) : []) {
-    const there = 'deviceId' in far ? terminalAt(reader, far.deviceId, far.terminal) : undefined
-    if (there && there.category !== 'panel') return { terminal: there.terminal, name: there.device.name }
-  }
-  return undefined
+  return at && !carries[family].includes(at.terminal.signal) ? signalWords[at.terminal.signal] : undefined
 }

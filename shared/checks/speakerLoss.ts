@@ -10,7 +10,7 @@ import type { JobReader } from '../derive/jobReader.ts'
 import type { CableType } from '../model/cableType.ts'
 import type { Run } from '../model/run.ts'
 import { formatConductor, formatNumber } from '../units.ts'
-import { defineCheck, lengthText, type Draft } from './define.ts'
+import { defineCheck, lengthText, setBy, type Draft } from './define.ts'
 import { lossIn, lossText, lossWords } from './lossWords.ts'
 
 /** Gauges that are named when no cable of the job would do. */
@@ -62,7 +62,7 @@ function overLimit(reader: JobReader, { run, type, length, speaker, loss }: Case
     sentence: `${formatConductor(type, conductorUnit)}${onward} loses ${lossText(loss, convention)} at ${lengthText(reader, length.totalMm)} into ${speaker.loadText}; the limit is ${lossText(limit, convention)}.`,
     advice: better.advice,
     figure: { value: loss, unit, text: `${formatNumber(loss, decimals)} ${unit}` },
-    limit: { value: limit, unit, text: `${formatNumber(limit, decimals)} ${unit}`, setBy: 'job' },
+    limit: { value: limit, unit, text: `${formatNumber(limit, decimals)} ${unit}`, setBy: setBy(limits, isStop ? 'speakerLossStop' : 'speakerLossCaution') },
     basis: basisOf(reader, { run, type, length, speaker, loss }),
     figures: [type.code, length.totalMm, speaker.loadOhm.toFixed(3), loss.toFixed(3), convention, caution, stop, limits.conductorTemperatureC].join('|'),
     remedy: better.remedy,

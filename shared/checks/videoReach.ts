@@ -1,8 +1,8 @@
 import { withinLimit } from '../calc/speaker/load.ts'
 import { formatClockMhz, fullClassReachM } from '../calc/video/linkReach.ts'
-import { cordsOn, terminalAt, type TerminalAt } from '../derive/ends.ts'
+import { deviceBeyond, type TerminalAt } from '../derive/ends.ts'
 import type { JobReader } from '../derive/jobReader.ts'
-import { factsOf } from '../derive/runFacts.ts'
+import { lengthOf } from '../derive/lengthOf.ts'
 import type { Category } from '../model/cableType.ts'
 import type { RunEnd } from '../model/run.ts'
 import { formatNumber } from '../units.ts'
@@ -15,26 +15,35 @@ export const videoReach = defineCheck({
   tier: 'practice',
   source: 'Reach as the device’s model states; else 100 m to 225 MHz of character rate and 70 or 100 m above by category (projector and matrix manuals, public copies)',
   about: 'run',
-  limits: () => [{ severity: 'stop', text: 'over the reach of the link' }],
+  limits: () => [
+    { severity: 'stop', text: 'over the reach of the link' },
+    { severity: 'note', text: 'reach not known' },
+  ],
   look: (reader, run) => {
     const type = reader.find('cableType', run.cableTypeId)
     if (type?.family !== 'twisted-pair' || type.category === null) return []
     const link = linkTerminal(reader, run.a) ?? linkTerminal(reader, run.b)
-    const { length } = factsOf(reader, run)
+    const { length } = lengthOf(reader, run)
     if (!link || !length) return []
     const reach = reachOf(link, type.category)
-    if (reach !== null && withinLimit(length.totalMm, reach.metres * 1000)) return []
-    const format = link.device.videoFormat
+    const { videoFormat: format, name } = link.device
+    const basis = { aboutName: run.label, figures: [length.totalMm, type.category, format ?? '', reach.metres ?? 'none', link.terminal.ratings.linkClass ?? ''].join('|') }
+    if (reach.metres === null && reach.isUnknown)
+      return [{ ...basis, severity: 'note', sentence: `How far ${name} reaches on category ${type.category} is not known.`, advice: 'Give the model its reach, or the device the format it carries.', basis: reach.why }]
+    const figure = { value: length.totalMm, unit: 'mm', text: lengthText(reader, length.totalMm) }
+    if (reach.metres === null)
+      return [{ ...basis, severity: 'stop', sentence: `${name} cannot carry ${format ?? 'its picture'} over category ${type.category}.`, advice: 'Use a higher category, a lower format, active optical cable, or another link.', basis: reach.why, figure }]
+    const reachMm = reach.metres * 1000
+    if (withinLimit(length.totalMm, reachMm)) return []
     return [
       {
+        ...basis,
         severity: 'stop',
-        aboutName: run.label,
-        sentence: reach === null ? `${link.device.name} cannot carry ${format ?? 'its picture'} over category ${type.category}.` : `${link.device.name} reaches ${lengthText(reader, reach.metres * 1000)} on category ${type.category}${format ? ` with ${format}` : ''}; this run is ${lengthText(reader, length.totalMm)}.`,
+        sentence: `${name} reaches ${lengthText(reader, reachMm)} on category ${type.category}${format ? ` with ${format}` : ''}; this run is ${lengthText(reader, length.totalMm)}.`,
         advice: 'Use a higher category, a lower format, active optical cable, or a link that reaches further.',
-        figure: { value: length.totalMm, unit: 'mm', text: lengthText(reader, length.totalMm) },
-        limit: reach && { value: reach.metres * 1000, unit: 'mm', text: lengthText(reader, reach.metres * 1000), setBy: 'source' },
-        basis: reach === null ? 'No reach is known for this category and format' : `${reach.why}: ${formatNumber(reach.metres, 0)} m`,
-        figures: [length.totalMm, type.category, format ?? '', reach?.metres ?? 'none', link.terminal.ratings.linkClass ?? ''].join('|'),
+        figure,
+        limit: { value: reachMm, unit: 'mm', text: lengthText(reader, reachMm), setBy: 'source' },
+        basis: `${reach.why}: ${formatNumber(reach.metres, 0)} m`,
       },
     ]
   },
@@ -42,27 +51,29 @@ export const videoReach = defineCheck({
 
 /** A video link's terminal at a run's end, directly or by a cord. */
 function linkTerminal(reader: JobReader, end: RunEnd | null): TerminalAt | undefined {
-  if (!end || 'rackId' in end) return undefined
-  if ('deviceId' in end) {
-    const at = terminalAt(reader, end.deviceId, end.terminal)
-    if (at?.terminal.signal === 'video-link') return at
-  }
-  const jack = 'plateId' in end ? (end.jackId === null ? null : { plateId: end.plateId, jackId: end.jackId }) : end.terminal === null ? null : { deviceId: end.deviceId, terminal: end.terminal }
-  if (!jack) return undefined
-  for (const { far } of cordsOn(reader, jack)) {
-    const at = 'deviceId' in far ? terminalAt(reader, far.deviceId, far.terminal) : undefined
-    if (at?.terminal.signal === 'video-link') return at
-  }
-  return undefined
+  const at = deviceBeyond(reader, end)
+  return at?.terminal.signal === 'video-link' ? at : undefined
 }
 
-function reachOf({ device, terminal }: TerminalAt, category: Category): { metres: number; why: string } | null {
-  const format = device.videoFormat
-  const stated = terminal.ratings.reachM?.[category]
-  const byClock = format === null ? null : fullClassReachM(formatClockMhz[format], category)
-  // A link without compression goes no further than its clock allows, whatever the model says of the best case.
-  if (terminal.ratings.linkClass === 'uncompressed-10g' || terminal.ratings.linkClass === 'compressed-1g') return stated === undefined ? null : { metres: stated, why: 'as its model states' }
-  if (stated !== undefined && byClock !== null) return { metres: Math.min(stated, byClock), why: 'the lesser of model and character rate' }
-  if (stated !== undefined) return { metres: stated, why: 'as its model states' }
-  return byClock === null ? null : { metres: byClock, why: `character rate ${formatNumber(formatClockMhz[format!], 1)} MHz` }
+/** Metres a link goes, null where it cannot or where nothing says, and why. */
+interface Reach {
+  readonly metres: number | null
+  readonly isUnknown: boolean
+  readonly why: string
+}
+
+/**
+ * What the model states goes before what the format's character rate allows of a full-class link. A link that compresses
+ * or that carries 10 Gb/s goes as far as its maker says whatever the format. A model that states a reach for some
+ * categories does not go on the others.
+ */
+function reachOf({ device, terminal }: TerminalAt, category: Category): Reach {
+  const { linkClass, reachM } = terminal.ratings
+  const stated = reachM?.[category] ?? null
+  const rate = device.videoFormat === null ? null : formatClockMhz[device.videoFormat]
+  if (stated === null && reachM && Object.keys(reachM).length) return { metres: null, isUnknown: false, why: `Its model states a reach for category ${Object.keys(reachM).join(', ')} only` }
+  if (linkClass === 'uncompressed-10g' || linkClass === 'compressed-1g' || rate === null) return { metres: stated, isUnknown: stated === null, why: stated === null ? 'Neither the model states a reach nor the device a format' : 'as its model states' }
+  const byRate = fullClassReachM(rate, category)
+  if (byRate === null) return { metres: null, isUnknown: false, why: `Character rate ${formatNumber(rate, 1)} MHz is over what a full-class link carries without compression` }
+  return { metres: stated === null ? byRate : Math.min(stated, byRate), isUnknown: false, why: `${stated === null ? '' : 'the lesser of what its model states and of '}character rate ${formatNumber(rate, 1)} MHz` }
 }

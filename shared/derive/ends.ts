@@ -61,3 +61,24 @@ export function endRoom(reader: JobReader, end: RunEnd | null): Room | undefined
   const device = reader.find('device', end.deviceId)
   return reader.find('room', reader.find('plate', device?.plateId)?.roomId ?? reader.find('rack', device?.rackId)?.roomId ?? device?.roomId)
 }
+
+/** The front of a jack or port that an end has behind it; null for a device's own terminal, a rack, or an open end. */
+function frontOf(end: RunEnd): Parameters<typeof cordsOn>[1] | null {
+  if ('plateId' in end) return end.jackId === null ? null : { plateId: end.plateId, jackId: end.jackId }
+  return 'deviceId' in end && end.terminal !== null ? { deviceId: end.deviceId, terminal: end.terminal } : null
+}
+
+/** The device's terminal that an end comes to: itself, or the one beyond a jack's or a panel port's cord. */
+export function deviceBeyond(reader: JobReader, end: RunEnd | null): TerminalAt | undefined {
+  if (!end || 'rackId' in end) return undefined
+  if ('deviceId' in end) {
+    const at = terminalAt(reader, end.deviceId, end.terminal)
+    if (!at || at.category !== 'panel') return at
+  }
+  const front = frontOf(end)
+  for (const { far } of front ? cordsOn(reader, front) : []) {
+    const there = 'deviceId' in far ? terminalAt(reader, far.deviceId, far.terminal) : undefined
+    if (there && there.category !== 'panel') return there
+  }
+  return undefined
+}

@@ -4,7 +4,7 @@ import type { JobReader } from '../derive/jobReader.ts'
 import type { Said } from '../derive/said.ts'
 import type { Level, Pathway } from '../model/place.ts'
 import type { Run } from '../model/run.ts'
-import { along, chosenWay, shortestWay, type Way } from './chaseGraph.ts'
+import { along, chosenWay, shortestWay, type Stop, type Way } from './chaseGraph.ts'
 import { endSpot, type EndSpot } from './endSpot.ts'
 
 type Drawn = NonNullable<LengthMakeUp['drawn']>
@@ -56,22 +56,32 @@ export function planeHeight(level: Level, run: Pick<Run, 'route'>): number {
 }
 
 function wayAlong(reader: JobReader, run: Run, a: EndSpot, b: EndSpot): Way & { straight?: true } {
-  const from = { levelId: a.level.id, at: a.at }
-  const to = { levelId: b.level.id, at: b.at }
-  const planeOf = (levelId: string) => {
-    const level = reader.find('level', levelId)
-    return level ? level.elevationMm + planeHeight(level, run) : 0
-  }
-  if (run.pathwayIds.length) {
-    const chases = run.pathwayIds.map((id) => reader.find('pathway', id)).filter((chase): chase is Pathway => chase !== undefined)
-    const chosen = chosenWay(from, to, chases, planeOf)
-    if (chosen) return chosen
-  }
+  const [from, to, planeOf] = [stopAt(a), stopAt(b), planes(reader, run)]
+  const chosen = run.pathwayIds.length ? chosenWay(from, to, chasesOf(reader, run), planeOf) : null
+  if (chosen) return chosen
   if (from.levelId === to.levelId) return { alongMm: along(a.at, b.at), pathwayIds: [] }
   const nearest = shortestWay(from, to, reader.all('pathway'), planeOf)
   if (nearest) return nearest
   // No chase joins the levels: straight up or down at the rack, else at end a, then along.
   return { alongMm: along(a.at, b.at) + Math.abs(planeOf(from.levelId) - planeOf(to.levelId)), pathwayIds: [], straight: true }
+}
+
+const stopAt = (spot: EndSpot): Stop => ({ levelId: spot.level.id, at: spot.at })
+const chasesOf = (reader: JobReader, run: Run) => run.pathwayIds.map((id) => reader.find('pathway', id)).filter((chase): chase is Pathway => chase !== undefined)
+
+const planes = (reader: JobReader, run: Run) => (levelId: string) => {
+  const level = reader.find('level', levelId)
+  return level ? level.elevationMm + planeHeight(level, run) : 0
+}
+
+/** What is wrong with the chases a run is told to take, as a sentence; null: they lead from end to end, or there are none. */
+export function strayChases(reader: JobReader, run: Run): string | null {
+  if (!run.pathwayIds.length) return null
+  const [a, b] = [endSpot(reader, run.a), endSpot(reader, run.b)]
+  if (typeof a === 'string' || typeof b === 'string') return null
+  const chases = chasesOf(reader, run)
+  if (chosenWay(stopAt(a), stopAt(b), chases, planes(reader, run))) return null
+  return `${chases.map((chase) => chase.name).join(', ')} ${chases.length === 1 ? 'does' : 'do'} not lead from ${a.level.name} to ${b.level.name}; the length is that of the nearest way.`
 }
 
 /** The way in words, end a first, for the inspector and the crew. */
