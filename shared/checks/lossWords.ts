@@ -1,4 +1,4 @@
-import type { SpeakerFacts } from '../derive/facts.ts'
+import type { LossFigures } from '../derive/facts.ts'
 import type { LossConvention } from '../model/limits.ts'
 import { formatNumber } from '../units.ts'
 
@@ -10,7 +10,8 @@ export const lossWords: Record<LossConvention, { readonly unit: string; readonly
   power: { unit: '%', name: 'power missing at the speaker', decimals: 1, formula: '1 - (Z/(Z + Rc))²' },
 }
 
-export const lossIn = (facts: SpeakerFacts, convention: LossConvention): number =>
+/** A loss by one convention, in its unit. */
+export const lossIn = (facts: LossFigures, convention: LossConvention): number =>
   ({ decibel: facts.lossDb, impedance: facts.impedancePercent, voltage: facts.voltagePercent, power: facts.powerPercent })[convention]
 
 /** A loss with its unit: "0.74 dB", "13.1 % of the load". */

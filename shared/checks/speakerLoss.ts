@@ -34,7 +34,7 @@ export const speakerLoss = defineCheck({
     if (!length || type?.family !== 'speaker') return []
     if (!speaker) return unknown(reader, run, type)
     const { limits } = reader.job()
-    const loss = lossIn(speaker, limits.speakerLossConvention)
+    const loss = lossIn(speaker.withLegs ?? speaker, limits.speakerLossConvention)
     if (withinLimit(loss, limits.speakerLossCaution)) return []
     return [overLimit(reader, { run, type, length, speaker, loss })]
   },
@@ -45,6 +45,7 @@ interface Case {
   readonly type: CableType
   readonly length: LengthMakeUp
   readonly speaker: SpeakerFacts
+  /** At the speaker that gets least. */
   readonly loss: number
 }
 
@@ -55,11 +56,12 @@ function overLimit(reader: JobReader, { run, type, length, speaker, loss }: Case
   const limit = isStop ? stop : caution
   const { unit, decimals } = lossWords[convention]
   const better = betterCable(reader, run, type, length.totalMm, speaker)
-  const onward = speaker.onwardFactor > 1 ? ', with the legs after it,' : ''
+  const own = lossText(lossIn(speaker, convention), convention)
+  const total = speaker.withLegs ? `, ${lossText(loss, convention)} with the legs after it` : ''
   return {
     severity: isStop ? 'stop' : 'caution',
     aboutName: run.label,
-    sentence: `${formatConductor(type, conductorUnit)}${onward} loses ${lossText(loss, convention)} at ${lengthText(reader, length.totalMm)} into ${speaker.loadText}; the limit is ${lossText(limit, convention)}.`,
+    sentence: `${formatConductor(type, conductorUnit)} loses ${own} at ${lengthText(reader, length.totalMm)} into ${speaker.loadText}${total}; the limit is ${lossText(limit, convention)}.`,
     advice: better.advice,
     figure: { value: loss, unit, text: `${formatNumber(loss, decimals)} ${unit}` },
     limit: { value: limit, unit, text: `${formatNumber(limit, decimals)} ${unit}`, setBy: setBy(limits, isStop ? 'speakerLossStop' : 'speakerLossCaution') },
@@ -105,12 +107,12 @@ function basisOf(reader: JobReader, { type, length, speaker, loss }: Case): stri
   const convention = limits.speakerLossConvention
   const conductorOhm = conductorOhmPerKm(type, limits.conductorTemperatureC)
   const stated = type.resistanceOhmPerKm !== null ? 'as its maker states' : `${type.stranding === 'class5' ? 'class 5' : type.stranding} ${type.material === 'cca' ? 'copper-clad aluminium' : 'copper'}`
-  const total = lossText(loss, convention)
-  const onward = speaker.onwardFactor > 1 ? `, and ${formatNumber(20 * Math.log10(speaker.onwardFactor), 2)} dB in the legs after it, ${total} in all` : ` = ${total}`
+  const own = lossText(lossIn(speaker, convention), convention)
+  const total = speaker.withLegs ? `; with the legs after it (${formatNumber(20 * Math.log10(speaker.onwardFactor), 2)} dB), worked back from the far ends: ${lossText(loss, convention)}` : ''
   return [
     `Rc = 2 × ${formatNumber(length.totalMm / 1000, 1)} m (${length.basis}) × ${formatNumber(conductorOhm ?? 0, 2)} ohm/km (${stated}, ${limits.conductorTemperatureC} °C) = ${formatNumber(speaker.loopResistanceOhm, 3)} ohm`,
-    `Z = ${formatNumber(speaker.behindOhm, 2)} ohm${speaker.assumed ? ' (no cord drawn: the speaker at the plate is taken to be on it)' : ''}`,
-    `${lossWords[convention].name}: ${lossWords[convention].formula}${onward}`,
+    `Z = ${formatNumber(speaker.loadOhm, 2)} ohm${speaker.assumed ? ' (no cord drawn: the speaker at the plate is taken to be on it)' : ''}`,
+    `${lossWords[convention].name}: ${lossWords[convention].formula} = ${own}${total}`,
     ...(speaker.uncounted.length ? [`left out, no length: ${speaker.uncounted.join(', ')}`] : []),
   ].join('; ')
 }

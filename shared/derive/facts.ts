@@ -30,8 +30,17 @@ export interface LengthMakeUp {
 /** A length, or a sentence that says what is missing. */
 export type RunLength = { readonly length: LengthMakeUp; readonly missing: null } | { readonly length: null; readonly missing: string }
 
-/** What the amplifier sees on a loudspeaker run, and what the run loses. */
-export interface SpeakerFacts {
+/** One loss in four figures, each of which is called loss somewhere. */
+export interface LossFigures {
+  readonly lossDb: number
+  /** Loop resistance as a share of the load, percent. */
+  readonly impedancePercent: number
+  readonly voltagePercent: number
+  readonly powerPercent: number
+}
+
+/** What the amplifier sees on a loudspeaker run, and what the run itself loses into that load. */
+export interface SpeakerFacts extends LossFigures {
   readonly loadOhm: number
   /** How the load came about: "two 8 ohm speakers in parallel". */
   readonly loadText: string
@@ -46,12 +55,8 @@ export interface SpeakerFacts {
   readonly onwardFactor: number
   /** Labels of legs after it whose length is not known, so that they are left out. */
   readonly uncounted: readonly string[]
-  /** Level lost at the speaker that gets least, dB, legs after this run included; so are the three shares below. */
-  readonly lossDb: number
-  /** Loop resistance as a share of the load, percent. */
-  readonly impedancePercent: number
-  readonly voltagePercent: number
-  readonly powerPercent: number
+  /** Lost at the speaker that gets least, legs after this run included; null: none comes after. */
+  readonly withLegs: LossFigures | null
 }
 
 /** Everything that follows about one run. */

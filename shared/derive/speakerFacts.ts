@@ -1,9 +1,10 @@
 import { conductorResistanceOhmPerKm } from '../calc/conductor/resistance.ts'
 import { lineLoss, loopResistanceOhm } from '../calc/speaker/lineLoss.ts'
 import { lineNode, totalRatio, type LineLeg, type LineNode } from '../calc/speaker/lineTree.ts'
+import { parallelOhm } from '../calc/speaker/load.ts'
 import type { CableType } from '../model/cableType.ts'
 import type { Run } from '../model/run.ts'
-import type { SpeakerFacts } from './facts.ts'
+import type { LossFigures, SpeakerFacts } from './facts.ts'
 import type { JobReader } from './jobReader.ts'
 import { lengthOf } from './lengthOf.ts'
 import { speakerLoad, type LoadedSpeaker, type SpeakerLoad } from './speakerLoad.ts'
@@ -21,13 +22,16 @@ function loopOf(reader: JobReader, run: Run): number | null {
 }
 
 /**
- * What a loudspeaker run loses at its length to the speaker that gets least, with the legs after it: hops of a line, and
- * what goes on from a volume control. Null where it feeds no speaker, or length, load or conductor is not known.
+ * What a loudspeaker run loses at its length into the load as the amplifier sees it; and, where legs come after it (hops
+ * of a line, what goes on from a volume control), what is lost with them at the speaker that gets least. Null where it
+ * feeds no speaker, or length, load or conductor is not known.
  */
 export function speakerFacts(reader: JobReader, run: Run): SpeakerFacts | null {
   const loop = loopOf(reader, run)
   const { load } = speakerLoad(reader, run)
-  if (!load || loop === null) return null
+  const tappedOhm = load?.lineVoltageV == null ? load?.loadOhm : parallelOhm(load.pairs.flat().map((speaker) => speaker.ohm))
+  const own = loop === null || tappedOhm == null ? null : figuresOf(loop, tappedOhm)
+  if (!load || loop === null || !own) return null
   const uncounted = new Set<string>()
   let worst: { ratio: number; node: LineNode } | null = null
   for (const pair of load.pairs) {
@@ -35,13 +39,17 @@ export function speakerFacts(reader: JobReader, run: Run): SpeakerFacts | null {
     const ratio = node && totalRatio(loop, node)
     if (node && ratio !== null && (!worst || ratio > worst.ratio)) worst = { ratio, node }
   }
-  const loss = worst && lineLoss(worst.ratio, 1)
-  if (!worst || !loss) return null
+  if (!worst) return null
   return {
-    loadOhm: load.loadOhm, loadText: load.text, lineVoltageV: load.lineVoltageV, assumed: load.assumed, loopResistanceOhm: loop,
+    loadOhm: load.loadOhm, loadText: load.text, lineVoltageV: load.lineVoltageV, assumed: load.assumed, loopResistanceOhm: loop, ...own,
     behindOhm: worst.node.behindOhm, onwardFactor: worst.node.worstFactor, uncounted: [...uncounted].sort(),
-    lossDb: loss.decibel, impedancePercent: loss.impedance, voltagePercent: loss.voltage, powerPercent: loss.power,
+    withLegs: worst.node.worstFactor > 1 ? figuresOf(worst.ratio, 1) : null,
   }
+}
+
+function figuresOf(loopOhm: number, loadOhm: number): LossFigures | null {
+  const loss = lineLoss(loopOhm, loadOhm)
+  return loss && { lossDb: loss.decibel, impedancePercent: loss.impedance, voltagePercent: loss.voltage, powerPercent: loss.power }
 }
 
 /** A run's end seen from its beginning, for one pair of conductors. */

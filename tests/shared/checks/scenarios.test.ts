@@ -123,7 +123,7 @@ describe('Thornbury, 400 runs and two head ends', () => {
     const terraces = [...clean.runs.values()].filter(({ run }) => run.purpose.startsWith('Terrace')).slice(0, 2)
     const cords: Step[] = terraces.map(({ run }, i) => ({ verb: 'cord.add', args: { id: `c${i}`, a: run.a as { deviceId: string; terminal: string }, b: { deviceId: 'device-AMP1', terminal: 'ch1' } } }))
     const [found] = find(after(doc, batch(...cords)), 'amplifierLoad')
-    expect(found).toMatchObject({ severity: 'stop', figure: { text: '2.0 ohm' }, limit: { text: '4.0 ohm' } })
+    expect(found).toMatchObject({ severity: 'stop', figure: { text: '2 ohm' }, limit: { text: '4 ohm' } })
   })
 })
 
