@@ -98,30 +98,44 @@ export function scheduleRow(doc: JobDocument, facts: RunFacts, pull: Pull | unde
 
 const purposeOf = (run: Run, plateName: string | undefined) => run.purpose || plateName || ''
 
+/** The records whose names a row is made of, beside its facts. */
+function namedBy(doc: JobDocument, { run }: RunFacts, pull: Pull | undefined): readonly unknown[] {
+  const ends = [run.a, run.b].flatMap((end) => {
+    const device = end && 'deviceId' in end ? find(doc, 'device', end.deviceId) : undefined
+    const plate = plateOfEnd(doc, end)
+    const room = roomOfEnd(doc, end)
+    return [device, find(doc, 'deviceModel', device?.modelId), end && 'rackId' in end ? find(doc, 'rack', end.rackId) : undefined, plate, find(doc, 'room', plate?.roomId), room, find(doc, 'level', room?.levelId)]
+  })
+  return [find(doc, 'cableType', run.cableTypeId), pull, ...ends]
+}
+
 /** Rows remembered by the facts they were made of, so that an edit makes only its own rows anew. */
-const remembered = new WeakMap<RunFacts, { doc: JobDocument; row: ScheduleRow }>()
+const remembered = new WeakMap<RunFacts, { maps: readonly unknown[]; named: readonly unknown[]; row: ScheduleRow }>()
+const namingKinds = ['level', 'room', 'plate', 'rack', 'device', 'deviceModel', 'cableType', 'pull', 'strike'] as const
+const sameAll = (a: readonly unknown[], b: readonly unknown[]) => a === b || a.every((each, index) => each === b[index])
 
 /**
  * Every run as a row, in label order: letters first, then numbers by value (MED2 before MED10).
- * A row is made anew when its facts are, or when a record it names could have changed.
+ * A row is made anew when its facts are, or when a record it names has changed.
  */
 export function scheduleRows(doc: JobDocument, facts: ReadonlyMap<string, RunFacts>): ScheduleRow[] {
   const pulls = lastPulls(doc)
+  const maps = namingKinds.map((kind) => doc.records[kind])
   const rows: ScheduleRow[] = []
   for (const each of facts.values()) {
     const before = remembered.get(each)
-    if (before && namesSame(before.doc, doc)) rows.push(before.row)
+    // Where no map of a naming kind has changed nothing has; else the very records tell.
+    if (before && sameAll(before.maps, maps)) rows.push(before.row)
     else {
-      const row = scheduleRow(doc, each, pulls.get(each.run.id))
-      remembered.set(each, { doc, row })
+      const pull = pulls.get(each.run.id)
+      const named = namedBy(doc, each, pull)
+      const row = before && sameAll(before.named, named) ? before.row : scheduleRow(doc, each, pull)
+      remembered.set(each, { maps, named, row })
       rows.push(row)
     }
   }
   return rows.sort((a, b) => compareLabels(a.label, b.label))
 }
-
-const namesSame = (a: JobDocument, b: JobDocument) =>
-  a === b || (['level', 'room', 'plate', 'rack', 'device', 'deviceModel', 'cableType', 'pull', 'strike'] as const).every((kind) => a.records[kind] === b.records[kind])
 
 const collator = new Intl.Collator('en', { numeric: true, sensitivity: 'base' })
 /** Order of labels as a person reads them. */
