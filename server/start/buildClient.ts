@@ -28,7 +28,7 @@ export async function buildClientIfStale(say: (line: string) => void): Promise<v
     putInPlace(draft, digest)
   } catch (error) {
     const { stderr, stdout } = error as { stderr?: string; stdout?: string }
-    throw new Error(`The client could not be built:\n${firstLines(stderr || stdout || String(error))}`)
+    throw new Error(`The client could not be built:\n${firstLines(stderr || stdout || String(error))}`, { cause: error })
   } finally {
     rmSync(draft, { recursive: true, force: true })
   }
