@@ -5,7 +5,7 @@ import type { Limits } from '../model/limits.ts'
 import { factsOf } from '../derive/runFacts.ts'
 import type { Run, RunEnd } from '../model/run.ts'
 import { formatLength } from '../units.ts'
-import { defineCheck, lengthText, setBy, type Draft } from './define.ts'
+import { defineCheck, lengthsApart, lengthText, setBy, type Draft } from './define.ts'
 
 export const dataLength = defineCheck({
   id: 'dataLength',
@@ -24,16 +24,19 @@ export const dataLength = defineCheck({
     if (!length || type?.family !== 'twisted-pair' || !mayCarryData(reader, run)) return []
     const { limits } = reader.job()
     const cordsMm = cordLength(reader, run)
-    const draft = (severity: Draft['severity'], what: string, valueMm: number, key: keyof Limits & `data${string}`): Draft => ({
-      severity,
-      aboutName: run.label,
-      sentence: `${what} is ${lengthText(reader, valueMm)}; the limit is ${lengthText(reader, limits[key])}.`,
-      advice: severity === 'stop' ? 'Move the far end nearer, put a switch between, or use fiber.' : 'Check the route before it is pulled: slack and detours count.',
-      figure: { value: valueMm, unit: 'mm', text: lengthText(reader, valueMm) },
-      limit: { value: limits[key], unit: 'mm', text: lengthText(reader, limits[key]), setBy: setBy(limits, key) },
-      basis: `${length.basis} length ${lengthText(reader, length.totalMm)}, slack included${cordsMm ? `; cords ${lengthText(reader, cordsMm)}` : ''}`,
-      figures: [length.totalMm, cordsMm, limits[key]].join('|'),
-    })
+    const draft = (severity: Draft['severity'], what: string, valueMm: number, key: keyof Limits & `data${string}`): Draft => {
+      const [value, limit] = lengthsApart(reader, valueMm, limits[key])
+      return {
+        severity,
+        aboutName: run.label,
+        sentence: `${what} is ${value}; the limit is ${limit}.`,
+        advice: severity === 'stop' ? 'Move the far end nearer, put a switch between, or use fiber.' : 'Check the route before it is pulled: slack and detours count.',
+        figure: { value: valueMm, unit: 'mm', text: value },
+        limit: { value: limits[key], unit: 'mm', text: limit, setBy: setBy(limits, key) },
+        basis: `${length.basis} length ${lengthText(reader, length.totalMm)}, slack included${cordsMm ? `; cords ${lengthText(reader, cordsMm)}` : ''}`,
+        figures: [length.totalMm, cordsMm, limits[key]].join('|'),
+      }
+    }
     if (!withinLimit(length.totalMm, limits.dataLinkMm)) return [draft('stop', 'The run', length.totalMm, 'dataLinkMm')]
     if (!withinLimit(length.totalMm + cordsMm, limits.dataChannelMm)) return [draft('stop', 'The run with its cords', length.totalMm + cordsMm, 'dataChannelMm')]
     if (!withinLimit(length.totalMm, limits.dataLinkCautionMm)) return [draft('caution', 'The run', length.totalMm, 'dataLinkCautionMm')]

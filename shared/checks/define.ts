@@ -3,7 +3,7 @@ import type { Acceptance } from '../model/fieldRecord.ts'
 import { defaultLimits, type Limits } from '../model/limits.ts'
 import type { RecordOf } from '../model/record.ts'
 import { isStruck } from '../model/struck.ts'
-import { formatLength, type LengthUnit } from '../units.ts'
+import { formatLength, mmPerFoot, mmPerMetre, type LengthUnit } from '../units.ts'
 import type { Finding, Limit, Severity, Tier } from './finding.ts'
 
 /** Kinds that checks look at. */
@@ -67,3 +67,17 @@ export const setBy = (limits: Limits, key: keyof Limits): Limit['setBy'] => (lim
 
 /** A length in the job's unit, whole, for sentences. */
 export const lengthText = (reader: JobReader, mm: number): string => formatLength(mm, reader.job().lengthUnit, { as: 'whole' })
+
+/** How far something goes, down to the whole unit: a reach is never rounded up. */
+export function reachText(reader: JobReader, mm: number): string {
+  const unit = reader.job().lengthUnit === 'm' ? mmPerMetre : mmPerFoot
+  return lengthText(reader, Math.floor(mm / unit + 1e-9) * unit)
+}
+
+/** Two lengths in whole units, or exactly where whole units would read alike. */
+export function lengthsApart(reader: JobReader, a: number, b: number): readonly [string, string] {
+  const whole = [lengthText(reader, a), lengthText(reader, b)] as const
+  if (a === b || whole[0] !== whole[1]) return whole
+  const exact = (mm: number) => formatLength(mm, reader.job().lengthUnit, { as: 'exact' })
+  return [exact(a), exact(b)]
+}

@@ -1,5 +1,5 @@
 import { factsOf } from '../derive/runFacts.ts'
-import { defineCheck, lengthText, type Draft } from './define.ts'
+import { defineCheck, lengthsApart, type Draft } from './define.ts'
 
 /** A stated length under this share of the way itself is doubted. */
 const leastShare = 0.5
@@ -21,20 +21,18 @@ export const lengthDoubt = defineCheck({
     // What was pulled is held against its own marks.
     if (!length || !type || length.basis === 'pulled') return []
     const putUpMm = Math.max(...type.putUps.map((each) => each.lengthMm))
-    const total = lengthText(reader, length.totalMm)
-    const draft = (rest: Pick<Draft, 'severity' | 'sentence' | 'advice' | 'basis'>, limitMm: number): Draft => ({
-      ...rest,
-      advice: rest.advice ?? '',
-      aboutName: run.label,
-      figure: { value: length.totalMm, unit: 'mm', text: total },
-      limit: { value: limitMm, unit: 'mm', text: lengthText(reader, limitMm), setBy: 'source' },
-      figures: [length.totalMm, limitMm].join('|'),
-    })
+    const draft = (severity: Draft['severity'], limitMm: number, say: (total: string, limit: string) => Pick<Draft, 'sentence' | 'basis'> & { advice: string }): Draft => {
+      const [total, limit] = lengthsApart(reader, length.totalMm, limitMm)
+      return {
+        ...say(total, limit), severity, aboutName: run.label, figures: [length.totalMm, limitMm].join('|'),
+        figure: { value: length.totalMm, unit: 'mm', text: total }, limit: { value: limitMm, unit: 'mm', text: limit, setBy: 'source' },
+      }
+    }
     if (length.totalMm > putUpMm)
-      return [draft({ severity: 'caution', sentence: `This run is ${total}, and ${type.code} is sold in ${lengthText(reader, putUpMm)} at most.`, advice: 'Find a longer put-up, a shorter way, or a place for equipment between.', basis: `${length.basis} length ${total}; longest put-up ${lengthText(reader, putUpMm)}` }, putUpMm)]
+      return [draft('caution', putUpMm, (total, limit) => ({ sentence: `This run is ${total}, and ${type.code} is sold in ${limit} at most.`, advice: 'Find a longer put-up, a shorter way, or a place for equipment between.', basis: `${length.basis} length ${total}; longest put-up ${limit}` }))]
     if (length.basis !== 'stated' || !length.drawn) return []
     const wayMm = length.drawn.riseMm + length.drawn.alongMm + length.drawn.dropMm
     if (length.totalMm >= leastShare * wayMm) return []
-    return [draft({ severity: 'note', sentence: `${total} is stated, and the drawn way is ${lengthText(reader, wayMm)} without slack.`, advice: 'Look at the stated length, or at where the ends are drawn.', basis: `rise + along + drop = ${lengthText(reader, wayMm)}` }, wayMm)]
+    return [draft('note', wayMm, (total, way) => ({ sentence: `${total} is stated, and the drawn way is ${way} without slack.`, advice: 'Look at the stated length, or at where the ends are drawn.', basis: `rise + along + drop = ${way}` }))]
   },
 })

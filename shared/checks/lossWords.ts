@@ -14,9 +14,15 @@ export const lossWords: Record<LossConvention, { readonly unit: string; readonly
 export const lossIn = (facts: LossFigures, convention: LossConvention): number =>
   ({ decibel: facts.lossDb, impedance: facts.impedancePercent, voltage: facts.voltagePercent, power: facts.powerPercent })[convention]
 
-/** A loss with its unit: "0.74 dB", "13.1 % of the load". */
-export const lossText = (value: number, convention: LossConvention): string => {
-  const { unit, decimals } = lossWords[convention]
-  const figure = `${formatNumber(value, decimals)} ${unit}`
+/** A loss with its unit: "0.74 dB", "13.1 % of the load". Decimals as the convention has them unless more are asked for. */
+export const lossText = (value: number, convention: LossConvention, decimals = lossWords[convention].decimals): string => {
+  const figure = `${formatNumber(value, decimals)} ${lossWords[convention].unit}`
   return convention === 'impedance' ? `${figure} of the load` : figure
+}
+
+/** As many decimals as it takes to tell a loss from the limit it is over; four at most. */
+export function decimalsApart(value: number, limit: number, convention: LossConvention): number {
+  let decimals = lossWords[convention].decimals
+  while (decimals < 4 && value.toFixed(decimals) === limit.toFixed(decimals)) decimals++
+  return decimals
 }

@@ -10,8 +10,8 @@ import type { JobReader } from '../derive/jobReader.ts'
 import type { CableType } from '../model/cableType.ts'
 import type { Run } from '../model/run.ts'
 import { formatConductor, formatNumber } from '../units.ts'
-import { defineCheck, lengthText, setBy, type Draft } from './define.ts'
-import { lossIn, lossText, lossWords } from './lossWords.ts'
+import { defineCheck, lengthText, reachText, setBy, type Draft } from './define.ts'
+import { decimalsApart, lossIn, lossText, lossWords } from './lossWords.ts'
 
 /** Gauges that are named when no cable of the job would do. */
 const tradeGauges = [18, 16, 14, 12, 10]
@@ -54,10 +54,11 @@ function overLimit(reader: JobReader, { run, type, length, speaker, loss }: Case
   const { speakerLossConvention: convention, speakerLossCaution: caution, speakerLossStop: stop } = limits
   const isStop = !withinLimit(loss, stop)
   const limit = isStop ? stop : caution
-  const { unit, decimals } = lossWords[convention]
+  const { unit } = lossWords[convention]
+  const decimals = decimalsApart(loss, limit, convention)
   const better = betterCable(reader, run, type, length.totalMm, speaker)
-  const own = lossText(lossIn(speaker, convention), convention)
-  const total = speaker.withLegs ? `, ${lossText(loss, convention)} with the legs after it` : ''
+  const own = lossText(lossIn(speaker, convention), convention, decimals)
+  const total = speaker.withLegs ? `, ${lossText(loss, convention, decimals)} with the legs after it` : ''
   return {
     severity: isStop ? 'stop' : 'caution',
     aboutName: run.label,
@@ -87,7 +88,7 @@ function betterCable(reader: JobReader, run: Run, type: CableType, lengthMm: num
   const share = ownShare(ratioForLoss(caution, convention) ?? 0, speaker.onwardFactor) ?? 0
   if (share <= 0) return { advice: 'The legs after this run lose more than that by themselves: begin with those.', remedy: null }
   const choose = (offers: readonly GaugeOffer[]) => thinnestThatHolds(offers, lengthMm / 1000, speaker.behindOhm, 100 * share, 'impedance')
-  const upTo = (metres: number) => `stays under ${lossText(caution, convention)} up to ${lengthText(reader, Math.floor(metres * 1000))}`
+  const upTo = (metres: number) => `stays under ${lossText(caution, convention)} up to ${reachText(reader, metres * 1000)}`
   const offers = reader.all('cableType').filter((each) => each.family === 'speaker' && each.conductors === type.conductors && sameFitness(each, type))
   const best = choose(offers.flatMap((each) => offerOf(each.id, conductorOhmPerKm(each, conductorTemperatureC))))
   const chosen = best && offers.find((each) => each.id === best.id)

@@ -6,7 +6,7 @@ import { lengthOf } from '../derive/lengthOf.ts'
 import type { Category } from '../model/cableType.ts'
 import type { RunEnd } from '../model/run.ts'
 import { formatNumber } from '../units.ts'
-import { defineCheck, lengthText } from './define.ts'
+import { defineCheck, lengthsApart } from './define.ts'
 
 export const videoReach = defineCheck({
   id: 'videoReach',
@@ -30,19 +30,19 @@ export const videoReach = defineCheck({
     const basis = { aboutName: run.label, figures: [length.totalMm, type.category, format ?? '', reach.metres ?? 'none', link.terminal.ratings.linkClass ?? ''].join('|') }
     if (reach.metres === null && reach.isUnknown)
       return [{ ...basis, severity: 'note', sentence: `How far ${name} reaches on category ${type.category} is not known.`, advice: 'Give the model its reach, or the device the format it carries.', basis: reach.why }]
-    const figure = { value: length.totalMm, unit: 'mm', text: lengthText(reader, length.totalMm) }
     if (reach.metres === null)
-      return [{ ...basis, severity: 'stop', sentence: `${name} cannot carry ${format ?? 'its picture'} over category ${type.category}.`, advice: 'Use a higher category, a lower format, active optical cable, or another link.', basis: reach.why, figure }]
+      return [{ ...basis, severity: 'stop', sentence: `${name} cannot carry ${format ?? 'its picture'} over category ${type.category}.`, advice: 'Use a higher category, a lower format, active optical cable, or another link.', basis: reach.why }]
     const reachMm = reach.metres * 1000
     if (withinLimit(length.totalMm, reachMm)) return []
+    const [ownText, reachText] = lengthsApart(reader, length.totalMm, reachMm)
     return [
       {
         ...basis,
         severity: 'stop',
-        sentence: `${name} reaches ${lengthText(reader, reachMm)} on category ${type.category}${format ? ` with ${format}` : ''}; this run is ${lengthText(reader, length.totalMm)}.`,
+        sentence: `${name} reaches ${reachText} on category ${type.category}${format ? ` with ${format}` : ''}; this run is ${ownText}.`,
         advice: 'Use a higher category, a lower format, active optical cable, or a link that reaches further.',
-        figure,
-        limit: { value: reachMm, unit: 'mm', text: lengthText(reader, reachMm), setBy: 'source' },
+        figure: { value: length.totalMm, unit: 'mm', text: ownText },
+        limit: { value: reachMm, unit: 'mm', text: reachText, setBy: 'source' },
         basis: `${reach.why}: ${formatNumber(reach.metres, 0)} m`,
       },
     ]
