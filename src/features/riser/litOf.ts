@@ -28,3 +28,14 @@ export function litOf(doc: JobDocument, items: readonly Item[]): Lit {
   }
   return { runs, jacks, terminals, racks, chosen }
 }
+
+/** Jacks by id, and terminals as "device:terminal", that a run is on. */
+export function landedOf(doc: JobDocument): Set<string> {
+  const landed = new Set<string>()
+  for (const run of doc.records.run.values())
+    for (const end of [run.a, run.b]) {
+      if (end && 'plateId' in end && end.jackId) landed.add(end.jackId)
+      if (end && 'deviceId' in end && end.terminal) landed.add(`${end.deviceId}:${end.terminal}`)
+    }
+  return landed
+}

@@ -14,13 +14,16 @@ export type Tool =
 export type TagMode = 'label' | 'cable' | 'length'
 export type DialogKind = 'level' | 'room' | 'rack' | 'panel' | 'pathway' | 'remove' | 'drop' | 'shortcuts'
 
+/** Whether there is room for the drawing and the inspector side by side from the start. */
+export const isWide = (): boolean => window.innerWidth >= 1100
+
 /** How this person looks at the riser just now. Nothing of it is saved with the job. */
 export const useRiserStore = defineStore('riser', () => {
   const tool = shallowRef<Tool>({ kind: 'select' })
   const tagMode = ref<TagMode>('label')
   const isApart = ref(false)
   const dialog = shallowRef<DialogKind | null>(null)
-  const isInspectorOpen = ref(true)
+  const isInspectorOpen = ref(isWide())
   const zoom = ref(1)
   /** Said once after an edit: what a quick run could not do. */
   const caution = ref('')

@@ -1,4 +1,4 @@
-import { computed, ref, shallowRef, type ComputedRef, type ShallowRef } from 'vue'
+import { computed, ref, shallowRef, watch, type ComputedRef, type ShallowRef } from 'vue'
 import type { Catalog } from '../../../shared/api/catalog.ts'
 import type { Item } from '../../../shared/commands/items.ts'
 import { find, jobOf, type JobDocument } from '../../../shared/model/jobDocument.ts'
@@ -23,6 +23,7 @@ export function useRiserTools(doc: ComputedRef<JobDocument>, layout: ComputedRef
   const hint = shallowRef<{ text: string; screen: XY } | null>(null)
   const placed = ref(0)
   const hasTool = computed(() => riser.tool.kind !== 'select')
+  watch(hasTool, () => (hint.value = null))
 
   return { hasTool, hint, placed, place, showHint }
 
@@ -57,7 +58,8 @@ export function useRiserTools(doc: ComputedRef<JobDocument>, layout: ComputedRef
     const isOutside = layout.value.bays.some((bay) => bay.roomId === room.roomId && bay.outside)
     const preset = presetFor(connectorOf(type), isCeiling(room) || (connectorOf(type) === 'speaker-pair' && room.up > 0.8), isOutside)
     // A run tool goes where one clicks: the height under the pointer counts, not the usual one.
-    return { ...preset, heightMm: preset.mounting === 'ceiling' ? null : snapHeight(room.up * ceilingOf(doc.value, find(doc.value, 'room', room.roomId)!), ceilingOf(doc.value, find(doc.value, 'room', room.roomId)!)) }
+    const ceilingMm = ceilingOf(doc.value, find(doc.value, 'room', room.roomId)!)
+    return { ...preset, heightMm: preset.mounting === 'ceiling' ? null : snapHeight(room.up * ceilingMm, ceilingMm, jobOf(doc.value).lengthUnit) }
   }
 
   /** Says what a click or a drop here would mean: the room, the height. */

@@ -54,6 +54,7 @@ export function layoutRiser(doc: JobDocument, options: LayoutOptions): RiserLayo
   return {
     width: Math.ceil(placing.width),
     height: Math.ceil(heights.height),
+    isLarge: placing.isLarge,
     house: drawHouse(heights, placing.bays, Math.ceil(placing.width)),
     storeys: heights.storeys,
     captions: drawCaptions(storeys, heights, placing.isLarge ? 108 : 62),
@@ -121,6 +122,6 @@ function walksOf(lanes: ReturnType<typeof orderLanes>, locals: ReturnType<typeof
 }
 
 const emptyLayout = (tray: string[]): RiserLayout => ({
-  width: 960, height: 600, house: { ground: '', groundLine: '', earth: '', body: '', voids: [], slabs: '', posts: '', joists: '' },
+  width: 960, height: 600, isLarge: false, house: { ground: '', groundLine: '', earth: '', body: '', voids: [], slabs: '', posts: '', joists: '' },
   storeys: [], captions: [], bays: [], plates: [], devices: [], racks: [], chases: [], runs: [], tags: [], closeTags: [], folds: [], counts: [], tray, walks: [],
 })

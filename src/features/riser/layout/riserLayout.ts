@@ -147,6 +147,8 @@ export interface HouseDrawing {
 export interface RiserLayout {
   readonly width: number
   readonly height: number
+  /** Drawn to be looked at from farther away: names grow as one goes back. */
+  readonly isLarge: boolean
   readonly house: HouseDrawing
   readonly storeys: readonly StoreyBox[]
   readonly captions: readonly LevelCaption[]

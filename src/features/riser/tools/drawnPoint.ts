@@ -1,15 +1,11 @@
 import { find, type JobDocument } from '../../../../shared/model/jobDocument.ts'
+import { bayAt } from '../layout/findAt.ts'
 import type { BayBox, RiserLayout, XY } from '../layout/riserLayout.ts'
 import { extentOf, platePoint } from '../layout/wallSpot.ts'
 import type { RoomPoint } from './roomPoint.ts'
 
 const headroom = 14
 const foot = 46
-
-/** The bay under a point of the drawing. Under the roof and in the crawl: the room of that level. */
-export function bayAt(layout: RiserLayout, at: XY): BayBox | undefined {
-  return layout.bays.find((bay) => at.x >= bay.x && at.x <= bay.x + bay.w && at.y >= bay.y && at.y <= bay.y + bay.h)
-}
 
 /**
  * A point of the drawing as a place in a room. Bays keep the order of what hangs in them, not its distance, so a point

@@ -1,6 +1,6 @@
 import type { CatalogDeviceModel } from '../../../../shared/api/catalog.ts'
 import type { Step } from '../../../../shared/commands/index.ts'
-import { find, recordsOf, type JobDocument } from '../../../../shared/model/jobDocument.ts'
+import { find, jobOf, recordsOf, type JobDocument } from '../../../../shared/model/jobDocument.ts'
 import type { Plate } from '../../../../shared/model/place.ts'
 import { copyOfModel } from './jobCopies.ts'
 import type { Planned } from './planPlate.ts'
@@ -14,7 +14,7 @@ export function planDevice(doc: JobDocument, entry: CatalogDeviceModel, point: R
   const ceilingMm = ceilingOf(doc, room)
   const place = plate
     ? { plateId: plate.id }
-    : { roomId: room.id, at: placeAt(doc, point, 'ceiling').at, heightMm: Math.min(30_000, snapHeight(point.up * ceilingMm, ceilingMm)) }
+    : { roomId: room.id, at: placeAt(doc, point, 'ceiling').at, heightMm: Math.min(30_000, snapHeight(point.up * ceilingMm, ceilingMm, jobOf(doc).lengthUnit)) }
   const step: Step = { verb: 'device.add', args: { id, modelId: copy.id, name: entry.description.name, ...place } }
   return { intent: { verb: 'batch', args: { label: `Add ${entry.description.name} in ${room.name}`, steps: [...copy.steps, step] } }, plateId: '', runIds: [], caution: null }
 }

@@ -1,5 +1,6 @@
-import { find, type JobDocument } from '../../../../shared/model/jobDocument.ts'
+import { find, jobOf, type JobDocument } from '../../../../shared/model/jobDocument.ts'
 import type { Mounting, Plate, Room } from '../../../../shared/model/place.ts'
+import { mmPerInch, type LengthUnit } from '../../../../shared/units.ts'
 import { extentOf, wallOf, type Side } from '../layout/wallSpot.ts'
 
 /** A place in a room as the section shows it: across from west to east, and up from floor to ceiling, 0 to 1 each. */
@@ -13,17 +14,18 @@ export interface RoomPoint {
 export type PlatePlace = Pick<Plate, 'roomId' | 'mounting' | 'wall' | 'alongMm' | 'at' | 'heightMm' | 'heightTo'>
 
 /** Usual heights that a drag snaps to, mm over the floor: common practice, no source, but for 305 and 1219. */
-export const usualHeightsMm: readonly number[] = [51, 305, 406, 914, 1016, 1118, 1219, 1372, 1524, 1676, 1829, 1981, 2134, 2235, 2438, 2743]
+export const usualHeightsMm: readonly number[] = [51, 305, 406, 610, 762, 914, 1016, 1118, 1219, 1372, 1524, 1676, 1829, 1981, 2134, 2235, 2438, 2743]
 const ceilingShare = 0.94
-const snapMm = 160
+const snapMm = 90
 
 export const ceilingOf = (doc: JobDocument, room: Room): number => room.ceilingHeightMm ?? find(doc, 'level', room.levelId)?.ceilingHeightMm ?? 2743
 
-/** The nearest usual height, or the height itself to the centimetre where none is near. */
-export function snapHeight(heightMm: number, ceilingMm: number): number {
+/** The nearest usual height, or the height itself to the inch or centimetre where none is near. */
+export function snapHeight(heightMm: number, ceilingMm: number, unit: LengthUnit = 'ft'): number {
   const within = Math.min(Math.max(0, Math.round(heightMm)), ceilingMm)
   const usual = usualHeightsMm.filter((each) => each < ceilingMm).reduce((best, each) => (Math.abs(each - within) < Math.abs(best - within) ? each : best), 305)
-  return Math.abs(usual - within) <= snapMm ? usual : Math.round(within / 10) * 10
+  const step = unit === 'm' ? 10 : mmPerInch
+  return Math.abs(usual - within) <= snapMm ? usual : Math.round(Math.round(within / step) * step)
 }
 
 /** Whether a point is so high that the ceiling is meant. */
@@ -41,7 +43,7 @@ export function placeAt(doc: JobDocument, point: RoomPoint, mounting: Mounting, 
   if (mounting === 'ceiling' || mounting === 'floor') return { roomId: room.id, mounting, wall: null, alongMm: null, at: { xMm, yMm: middleY(room, xMm) }, heightMm: mounting === 'ceiling' ? ceilingMm : 0, heightTo: 'centre' }
   const side: Side = point.across < 0.03 ? 'W' : point.across > 0.97 ? 'E' : 'N'
   const { wall, alongMm } = wallAt(room, side, xMm)
-  return { roomId: room.id, mounting, wall, alongMm, at: null, heightMm: heightMm ?? snapHeight(point.up * ceilingMm, ceilingMm), heightTo: 'centre' }
+  return { roomId: room.id, mounting, wall, alongMm, at: null, heightMm: heightMm ?? snapHeight(point.up * ceilingMm, ceilingMm, jobOf(doc).lengthUnit), heightTo: 'centre' }
 }
 
 /**
@@ -56,7 +58,7 @@ export function moveTo(doc: JobDocument, plate: Plate, to: RoomPoint, from: Room
   const ceilingMm = ceilingOf(doc, room)
   const rise = from ? to.up - from.up : 0
   const up = from ? plate.heightMm / ceilingMm + rise : to.up
-  const heightMm = isHere && from && Math.abs(rise) < 0.02 ? plate.heightMm : snapHeight(up * ceilingMm, ceilingMm)
+  const heightMm = isHere && from && Math.abs(rise) < 0.02 ? plate.heightMm : snapHeight(up * ceilingMm, ceilingMm, jobOf(doc).lengthUnit)
   const base = { ...placeAt(doc, to, plate.mounting), heightMm, heightTo: plate.heightTo }
   if (keepsAcross) return { ...base, wall: plate.wall, alongMm: plate.alongMm }
   const side = isHere ? wallOf(room, plate.wall)?.side : undefined

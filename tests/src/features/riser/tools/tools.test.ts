@@ -126,7 +126,8 @@ describe('a point of the drawing', () => {
     expect(snapHeight(1190, 2743)).toBe(1219)
     expect(snapHeight(5, 2743)).toBe(51)
     expect(snapHeight(9000, 2400)).toBeLessThanOrEqual(2400)
-    expect(snapHeight(700, 2743)).toBe(700)
+    expect(snapHeight(500, 2743, 'm')).toBe(500)
+    expect(snapHeight(500, 2743, 'ft')).toBe(508)
   })
 
   it('puts a ceiling plate inside a room that has a corner cut out', () => {
