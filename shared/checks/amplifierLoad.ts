@@ -60,9 +60,9 @@ function tooLow(device: Device, { terminal, fed }: Channel): Draft[] {
       aboutName: `${device.name}, ${terminal.name}`,
       sentence: `${terminal.name} of ${device.name} sees ${ohmText(load)}; it may see no less than ${ohmText(least)}.`,
       advice: `Take a speaker off (${fed.map((each) => each.run.label).join(', ')}), or join them in series.`,
-      figure: { value: load, unit: 'ohm', text: `${ohmText(load)}` },
-      limit: { value: least, unit: 'ohm', text: `${ohmText(least)}`, setBy: 'source' },
-      basis: `1/Z = ${fed.map((each) => `1/${formatNumber(each.load.loadOhm, 1)}`).join(' + ')}`,
+      figure: { value: load, unit: 'ohm', text: ohmText(load) },
+      limit: { value: least, unit: 'ohm', text: ohmText(least), setBy: 'source' },
+      basis: `1/Z = ${fed.map((each) => `1/${ohmText(each.load.loadOhm)}`).join(' + ')}`,
       figures: [terminal.key, load.toFixed(3), least].join('|'),
     },
   ]
@@ -78,7 +78,7 @@ function untapped(device: Device, { terminal, fed }: Channel): Draft[] {
       aboutName: `${device.name}, ${terminal.name}`,
       sentence: `${names} ${speakers.length === 1 ? 'has' : 'have'} no tap chosen: on a constant-voltage line a speaker on its low impedance shorts the line.`,
       advice: 'Choose a tap. A measured line impedance far below V²/P is the clue on site.',
-      basis: 'V²/P with P the sum of taps; a speaker of 8 ohm in parallel draws the line down',
+      basis: fed.map(({ run, load }) => `${run.label}: ${load.totalW && load.lineVoltageV !== null ? `V²/P of its taps is ${ohmText(load.lineVoltageV ** 2 / load.totalW)}, ` : ''}with those on low impedance ${ohmText(load.loadOhm)}`).join('; '),
       figures: [terminal.key, names].join('|'),
     },
   ]
@@ -91,14 +91,16 @@ function overTapped(reader: JobReader, device: Device, model: DeviceModel, chann
   const draft = (name: string, taps: number, power: number): Draft[] => {
     const share = lineLoadPercent(taps, power)
     if (share === null || taps === 0 || withinLimit(share, lineLoadShare)) return []
+    const decimals = share.toFixed(0) === lineLoadShare.toFixed(0) ? 1 : 0
+    const percent = (value: number) => `${formatNumber(value, decimals)} %`
     return [
       {
         severity: 'caution',
         aboutName: name,
-        sentence: `Taps of ${formatNumber(taps, taps % 1 ? 1 : 0)} W on ${name} of ${formatNumber(power, 0)} W are ${formatNumber(share, 0)} %; the limit is ${formatNumber(lineLoadShare, 0)} %.`,
+        sentence: `Taps of ${formatNumber(taps, taps % 1 ? 1 : 0)} W on ${name} of ${formatNumber(power, 0)} W are ${percent(share)}; the limit is ${percent(lineLoadShare)}.`,
         advice: 'Choose lower taps, or a larger amplifier.',
-        figure: { value: share, unit: '%', text: `${formatNumber(share, 0)} %` },
-        limit: { value: lineLoadShare, unit: '%', text: `${formatNumber(lineLoadShare, 0)} %`, setBy: setBy(limits, 'lineLoadShare') },
+        figure: { value: share, unit: '%', text: percent(share) },
+        limit: { value: lineLoadShare, unit: '%', text: percent(lineLoadShare), setBy: setBy(limits, 'lineLoadShare') },
         basis: `sum of taps ${formatNumber(taps, 1)} W / ${formatNumber(power, 0)} W`,
         figures: [name, taps, power, lineLoadShare].join('|'),
       },

@@ -56,6 +56,7 @@ function playStory(seed: number, steps: number, start: JobDocument): { done: num
     doc = next.after
     derived = deriveJob(doc, derived)
     done++
+    expect(JSON.stringify([derived.findings, ...derived.runs.values()])).not.toMatch(/NaN|Infinity|undefined|\[object/)
     for (const finding of derived.findings) found.add(finding.accepted ? `${finding.check}, accepted` : finding.check)
     expect(plain(derived), `seed ${seed} step ${step} ${undo ? 'undo' : (intent?.verb ?? '')}`).toEqual(plain(deriveJob(doc)))
   }
