@@ -1,9 +1,9 @@
 import { withinLimit } from '../calc/speaker/load.ts'
-import { cordsOn, deviceBeyond } from '../derive/ends.ts'
+import { cordsMmOf, deviceBeyond } from '../derive/ends.ts'
 import type { JobReader } from '../derive/jobReader.ts'
 import type { Limits } from '../model/limits.ts'
 import { factsOf } from '../derive/runFacts.ts'
-import type { Run, RunEnd } from '../model/run.ts'
+import type { Run } from '../model/run.ts'
 import { formatLength } from '../units.ts'
 import { defineCheck, lengthsApart, lengthText, setBy, type Draft } from './define.ts'
 
@@ -23,7 +23,7 @@ export const dataLength = defineCheck({
     const type = reader.find('cableType', run.cableTypeId)
     if (!length || type?.family !== 'twisted-pair' || !mayCarryData(reader, run)) return []
     const { limits } = reader.job()
-    const cordsMm = cordLength(reader, run)
+    const cordsMm = cordsMmOf(reader, run)
     const draft = (severity: Draft['severity'], what: string, valueMm: number, key: keyof Limits & `data${string}`): Draft => {
       const [value, limit] = lengthsApart(reader, valueMm, limits[key])
       return {
@@ -44,19 +44,12 @@ export const dataLength = defineCheck({
   },
 })
 
-/** Twisted pair is also laid for keypads, sensors and shades, which no data limit holds for: where a device says so, it is believed. */
+/**
+ * Twisted pair is also laid for keypads, sensors and shades, which no data limit holds for, and for video links, whose
+ * own reach is checked: where a device says so, it is believed.
+ */
 const mayCarryData = (reader: JobReader, run: Run) =>
   (['a', 'b'] as const).every((end) => {
     const signal = deviceBeyond(reader, run[end])?.terminal.signal
-    return signal === undefined || signal === 'ethernet' || signal === 'video-link'
+    return signal === undefined || signal === 'ethernet'
   })
-
-/** The cords at both ends together, mm; the longest where an end has several. */
-function cordLength(reader: JobReader, run: Run): number {
-  return longestCord(reader, run.a) + longestCord(reader, run.b)
-}
-
-function longestCord(reader: JobReader, end: RunEnd | null): number {
-  const at = end && 'plateId' in end && end.jackId !== null ? { plateId: end.plateId, jackId: end.jackId } : end && 'deviceId' in end && end.terminal !== null ? { deviceId: end.deviceId, terminal: end.terminal } : null
-  return at ? Math.max(0, ...cordsOn(reader, at).map(({ cord }) => cord.lengthMm)) : 0
-}

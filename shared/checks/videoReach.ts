@@ -1,17 +1,17 @@
 import { withinLimit } from '../calc/speaker/load.ts'
 import { formatClockMhz, fullClassReachM } from '../calc/video/linkReach.ts'
-import { deviceBeyond, type TerminalAt } from '../derive/ends.ts'
+import { cordsMmOf, deviceBeyond, type TerminalAt } from '../derive/ends.ts'
 import type { JobReader } from '../derive/jobReader.ts'
 import { lengthOf } from '../derive/lengthOf.ts'
 import type { Category } from '../model/cableType.ts'
 import type { RunEnd } from '../model/run.ts'
 import { formatNumber } from '../units.ts'
-import { defineCheck, lengthsApart } from './define.ts'
+import { defineCheck, lengthsApart, lengthText } from './define.ts'
 
 export const videoReach = defineCheck({
   id: 'videoReach',
   title: 'Video link reach',
-  what: 'Video over a twisted-pair run, by the format carried, the kind of link and the category of the cable',
+  what: 'Video over a twisted-pair run and its cords, by the format carried, the kind of link and the category of the cable',
   tier: 'practice',
   source: 'Reach as the device’s model states; else 100 m to 225 MHz of character rate and 70 or 100 m above by category (projector and matrix manuals, public copies)',
   about: 'run',
@@ -27,23 +27,26 @@ export const videoReach = defineCheck({
     if (!link || !length) return []
     const reach = reachOf(link, type.category)
     const { videoFormat: format, name } = link.device
-    const basis = { aboutName: run.label, figures: [length.totalMm, type.category, format ?? '', reach.metres ?? 'none', link.terminal.ratings.linkClass ?? ''].join('|') }
+    const basis = { aboutName: run.label, figures: [length.totalMm, cordsMmOf(reader, run), type.category, format ?? '', reach.metres ?? 'none', link.terminal.ratings.linkClass ?? ''].join('|') }
     if (reach.metres === null && reach.isUnknown)
       return [{ ...basis, severity: 'note', sentence: `How far ${name} reaches on category ${type.category} is not known.`, advice: 'Give the model its reach, or the device the format it carries.', basis: reach.why }]
     if (reach.metres === null)
       return [{ ...basis, severity: 'stop', sentence: `${name} cannot carry ${format ?? 'its picture'} over category ${type.category}.`, advice: 'Use a higher category, a lower format, active optical cable, or another link.', basis: reach.why }]
     const reachMm = reach.metres * 1000
-    if (withinLimit(length.totalMm, reachMm)) return []
-    const [ownText, reachText] = lengthsApart(reader, length.totalMm, reachMm)
+    // A reach is that of the whole link, cords and all.
+    const cordsMm = cordsMmOf(reader, run)
+    const linkMm = length.totalMm + cordsMm
+    if (withinLimit(linkMm, reachMm)) return []
+    const [ownText, reachText] = lengthsApart(reader, linkMm, reachMm)
     return [
       {
         ...basis,
         severity: 'stop',
-        sentence: `${name} reaches ${reachText} on category ${type.category}${format ? ` with ${format}` : ''}; this run is ${ownText}.`,
+        sentence: `${name} reaches ${reachText} on category ${type.category}${format ? ` with ${format}` : ''}; this run is ${ownText}${cordsMm ? ' with its cords' : ''}.`,
         advice: 'Use a higher category, a lower format, active optical cable, or a link that reaches further.',
-        figure: { value: length.totalMm, unit: 'mm', text: ownText },
+        figure: { value: linkMm, unit: 'mm', text: ownText },
         limit: { value: reachMm, unit: 'mm', text: reachText, setBy: 'source' },
-        basis: `${reach.why}: ${formatNumber(reach.metres, 0)} m`,
+        basis: `${reach.why}: ${formatNumber(reach.metres, 0)} m; ${length.basis} length ${lengthText(reader, length.totalMm)}, cords ${lengthText(reader, cordsMm)}`,
       },
     ]
   },

@@ -82,3 +82,12 @@ export function deviceBeyond(reader: JobReader, end: RunEnd | null): TerminalAt 
   }
   return undefined
 }
+
+/** The cords at both ends of a run together, mm; the longest where an end has several. */
+export function cordsMmOf(reader: JobReader, run: Run): number {
+  const longest = (end: RunEnd | null) => {
+    const front = end && frontOf(end)
+    return front ? Math.max(0, ...cordsOn(reader, front).map(({ cord }) => cord.lengthMm)) : 0
+  }
+  return longest(run.a) + longest(run.b)
+}

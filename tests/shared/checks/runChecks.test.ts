@@ -43,8 +43,9 @@ describe('video link reach', () => {
     ).filter((record) => record.id !== 'k-desk')
   it('holds the model’s stated reach by category', () => {
     const ratings = { linkClass: 'uncompressed-10g', reachM: { '6': 55, '6A': 100 } }
-    expect(sentences('videoReach', at(55_000, ratings))).toEqual([])
-    expect(sentences('videoReach', at(60_000, ratings))).toEqual([['stop', 'STU1-D1', 'Sender reaches 180 ft on category 6; this run is 197 ft.']])
+    // The cord to the sender is 1 m, and counts.
+    expect(sentences('videoReach', at(54_000, ratings))).toEqual([])
+    expect(sentences('videoReach', at(54_500, ratings))).toEqual([['stop', 'STU1-D1', 'Sender reaches 180 ft on category 6; this run is 182 ft with its cords.']])
     expect(sentences('videoReach', at(60_000, ratings, {}, { category: '6A' }))).toEqual([])
   })
   it('does not let a model go on a category it states nothing for', () => {
@@ -53,7 +54,7 @@ describe('video link reach', () => {
   it('goes by the format where the model states nothing: 100 m at 1080p60, 70 m at 2160p30 on category 6, 100 m on 6A', () => {
     const format = (videoFormat: string, mm: number, category = '6') => sentences('videoReach', at(mm, { linkClass: 'passive-balun' }, { videoFormat }, { category })).length
     // 148.5 MHz is under 225; 297 MHz is over it.
-    expect([format('1080p60', 85_000), format('2160p30', 70_000), format('2160p30', 70_500), format('2160p60-420', 70_500), format('2160p30', 89_000, '6A')]).toEqual([0, 0, 1, 1, 0])
+    expect([format('1080p60', 99_000), format('2160p30', 69_000), format('2160p30', 69_500), format('2160p60-420', 69_500), format('2160p30', 99_000, '6A'), format('1080p60', 99_500)]).toEqual([0, 0, 1, 1, 0, 1])
   })
   it('stops a format that no link without compression carries', () => {
     expect(sentences('videoReach', at(10_000, {}, { videoFormat: '2160p60' }))).toEqual([['stop', 'STU1-D1', 'Sender cannot carry 2160p60 over category 6.']])
