@@ -12,7 +12,7 @@ export type Tool =
   | { readonly kind: 'device'; readonly entry: CatalogDeviceModel }
 
 export type TagMode = 'label' | 'cable' | 'length'
-export type DialogKind = 'level' | 'room' | 'rack' | 'panel' | 'pathway' | 'remove' | 'drop' | 'shortcuts'
+export type DialogKind = 'level' | 'room' | 'rack' | 'panel' | 'pathway' | 'plate' | 'run' | 'remove' | 'drop'
 
 /** Whether there is room for the drawing and the inspector side by side from the start. */
 export const isWide = (): boolean => window.innerWidth >= 1100
