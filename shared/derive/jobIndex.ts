@@ -93,8 +93,10 @@ export class JobIndex {
     if (place) touch(place)
     const whole = this.wholes.get(kind)
     if (whole) touch(whole)
-    if (before) for (const key of indexKeysOf(doc, before)) touch(this.changed(key, kind, (answer) => answer.remove(id)))
-    if (after) for (const key of indexKeysOf(doc, after)) touch(this.changed(key, kind, (answer) => answer.put(after)))
+    const keys = after ? indexKeysOf(doc, after) : []
+    // Where it stays, it is replaced in its place: what people said keeps its order.
+    if (before) for (const key of indexKeysOf(doc, before)) if (!keys.includes(key)) touch(this.changed(key, kind, (answer) => answer.remove(id)))
+    if (after) for (const key of keys) touch(this.changed(key, kind, (answer) => answer.put(after)))
   }
 
   /** A strike is not an answer itself: it touches the answers that hold what it strikes. */
@@ -138,4 +140,4 @@ export class JobIndex {
 }
 
 const settled = (records: JobRecord[]): readonly JobRecord[] => (records.length === 1 || fieldKinds.has(records[0]!.kind) ? records : records.sort(settledOrder))
-const settledOrder = (a: JobRecord, b: JobRecord): number => (a.kind === 'run' && b.kind === 'run' ? a.serial - b.serial : a.id < b.id ? -1 : 1)
+const settledOrder = (a: JobRecord, b: JobRecord): number => (a.kind === 'run' && b.kind === 'run' ? a.serial - b.serial : 0) || (a.id < b.id ? -1 : 1)
