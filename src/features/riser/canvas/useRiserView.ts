@@ -5,7 +5,8 @@ import type { RiserLayout, XY } from '../layout/riserLayout.ts'
 export const zoomRange = { least: 0.5, most: 4, largestFit: 1.4 } as const
 const margin = 6
 const narrow = 600
-const readable = 0.85
+/** Tags are shown from the least on; where they would not be, one begins at the wanted zoom. */
+export const readable = { least: 0.76, wanted: 0.88 } as const
 
 /** Where one looks: fit, go to a point, zoom by a step. */
 export function useRiserView(layout: ComputedRef<RiserLayout>) {
@@ -16,15 +17,23 @@ export function useRiserView(layout: ComputedRef<RiserLayout>) {
     const { width, height } = layout.value
     return Math.min((dimensions.value.width - 2 * margin) / width, (dimensions.value.height - 2 * margin) / height, zoomRange.largestFit)
   }
-  /** The house and a little air; a drawing too wide for the pane begins at its left edge. */
+  /** The whole house and a little air. */
   function fit(duration = 0) {
-    if (!dimensions.value.width) return
-    const { width, height } = layout.value
-    const pane = dimensions.value
+    look(Math.max(0.2, fitZoom()), duration)
+  }
+  /** The first look: the whole house, or as much of it round the rack as can be read. A large job is read by its counts. */
+  function start() {
     const whole = Math.max(0.2, fitZoom())
-    // On a phone the whole house would be too small to read: as high as the pane, and one pans.
-    const zoom = pane.width < narrow && whole < readable ? Math.min(readable, Math.max(whole, (pane.height - 2 * margin) / height)) : whole
-    const middle = layout.value.racks[0] ? layout.value.racks[0].x + layout.value.racks[0].w / 2 : width / 2
+    const { width, height } = dimensions.value
+    const byHeight = (height - 2 * margin) / layout.value.height
+    const isFine = whole >= readable.least || (layout.value.isLarge && width >= narrow)
+    look(isFine ? whole : Math.min(readable.wanted, Math.max(whole, byHeight)), 0)
+  }
+  function look(zoom: number, duration: number) {
+    const pane = dimensions.value
+    if (!pane.width) return
+    const { width, height, racks } = layout.value
+    const middle = racks[0] ? racks[0].x + racks[0].w / 2 : width / 2
     const x = width * zoom <= pane.width ? (pane.width - width * zoom) / 2 : Math.min(margin, Math.max(pane.width - width * zoom - margin, pane.width / 2 - middle * zoom))
     void setViewport({ x, y: Math.max(margin / 4, (pane.height - height * zoom) / 2), zoom }, { duration })
   }
@@ -38,5 +47,5 @@ export function useRiserView(layout: ComputedRef<RiserLayout>) {
     void setViewport({ x: width / 2 - at.x * zoom, y: height / 2 - at.y * zoom, zoom }, { duration })
   }
   const stepZoom = (by: number) => void zoomTo(Math.min(zoomRange.most, Math.max(least.value, viewport.value.zoom * by)), { duration: 120 })
-  return { viewport, dimensions, least, fit, goTo, stepZoom, toDrawing: screenToFlowCoordinate, toScreen: flowToScreenCoordinate }
+  return { viewport, dimensions, least, start, fit, goTo, stepZoom, toDrawing: screenToFlowCoordinate, toScreen: flowToScreenCoordinate }
 }

@@ -26,7 +26,7 @@ export function readColumns(doc: JobDocument, storeys: readonly Storey[], trips:
   const groups: { planX: number; racks: ColumnRack[]; pathways: Pathway[] }[] = []
   for (const storey of storeys)
     for (const room of storey.rooms)
-      if (room.racks.length) groups.push({ planX: mean(room.racks.map((rack) => rack.at.xMm)), racks: room.racks.map((rack) => ({ rack, storey: storey.index })), pathways: [] })
+      if (room.racks.length) groups.push({ planX: mean(room.racks.map((rack) => rack.at.xMm)) + room.shift, racks: room.racks.map((rack) => ({ rack, storey: storey.index })), pathways: [] })
   const pathways = recordsOf(doc, 'pathway').sort((a, b) => a.at.xMm - b.at.xMm || a.id.localeCompare(b.id))
   const hasRack = groups.length > 0
   for (const pathway of pathways) {

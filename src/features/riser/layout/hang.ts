@@ -31,6 +31,7 @@ export interface Hanging {
 const codeFont = 8.5
 const headroom = 3
 const foot = 33
+const nameRoom = 17
 
 interface Piece {
   readonly place: FixturePlace
@@ -98,10 +99,12 @@ const scaleOf = (plate: Plate, isDense: boolean) => (isDense ? metrics.densePlat
 /** Height in a bay: where it is on the wall, moved until nothing covers it. */
 function seatIn(piece: Piece, box: StoreyBox, bay: PlacedBay, taken: Map<string, Box[]>): number {
   const { fixture } = piece.place
-  const top = box.ceiling + headroom + piece.h / 2
+  // The name of a room with a rack stands at the head of its bay.
+  const ceiling = box.ceiling + (piece.place.room.racks.length ? nameRoom : 0)
+  const top = ceiling + headroom + piece.h / 2
   const { over, under } = extentOf(piece)
   const bottom = Math.max(top, box.floor - foot - under)
-  const highest = Math.min(bottom, box.ceiling + headroom + over)
+  const highest = Math.min(bottom, ceiling + headroom + over)
   const isUp = fixture.plate?.mounting === 'ceiling' || fixture.up > 0.97
   const wanted = isUp ? top : Math.min(bottom, Math.max(highest, bottom - fixture.up * (bottom - top)))
   const others = taken.get(bay.room.room.id) ?? []

@@ -56,7 +56,8 @@ function sideOf(full: readonly StoreyBox[], at: (storey: StoreyBox, index: numbe
     const { wall, reach } = at(storey, index)
     const over = full[index + 1]
     if (isLean(index)) points.push([at(over!, index + 1).wall, storey.top + 6 - Math.min(30, outOf(index) * 0.45)], [reach + lip * way, storey.top + 6], [reach + lip * way, storey.top + 14])
-    if (reach !== wall) points.push([reach + (isLean(index) ? 0 : lip * way), isLean(index) ? storey.top + 14 : storey.top + 4], [reach, storey.ceiling], [wall, storey.ceiling])
+    if (reach !== wall && !isLean(index)) points.push([reach + lip * way, storey.top + 2], [reach + lip * way, storey.top + 10])
+    if (reach !== wall) points.push([reach, isLean(index) ? storey.top + 14 : storey.top + 10], [reach, storey.ceiling], [wall, storey.ceiling])
     else points.push([wall, isLean(index) ? storey.top + 14 : over ? storey.top : storey.top + 8])
     if (index === 0 || !isLean(index - 1)) points.push([wall, storey.floor])
   }

@@ -16,7 +16,7 @@ export const metrics = {
   foldOverInLarge: 40,
   lane: { bundled: 1.25, apart: 3.2, mostHeight: 46, mostWidth: 118 },
   localLane: 2.5,
-  tag: { height: 13, rowHeight: 15.5, rows: 4, mostRows: 6, font: 9.5, charWidth: 0.632, lead: 17, tail: 4, shape: 12, reach: 8, gap: 2.5 },
+  tag: { height: 13, rowHeight: 15.5, rows: 4, rowsAlone: 6, aloneOver: 30, more: 2, font: 9.5, charWidth: 0.632, lead: 17, tail: 4, shape: 12, reach: 8, gap: 2.5 },
   /** Between the lowest lane and the first row of tags, and between the last row and the ceiling. */
   tagOver: 9,
   tagUnder: 6,

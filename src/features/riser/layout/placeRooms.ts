@@ -6,7 +6,7 @@ import type { Exit } from './readTrips.ts'
 import { roomNeed, spreadRoom, type Contents, type RoomNeed } from './roomWidths.ts'
 import type { RunMark } from './riserLayout.ts'
 import type { Strand } from './strands.ts'
-import { seatTags, type TagWish } from './tagRows.ts'
+import { seatTags, tagRows, type TagWish } from './tagRows.ts'
 
 export interface PlacedBay {
   readonly room: HouseRoom
@@ -110,16 +110,16 @@ function rowOf(storey: Storey, wants: Wants, bands: readonly ColumnBands[], part
   const east = beside.filter((room) => room.centre >= middle)
   const inside = segments.map((rooms, index) => {
     const all = [...(index === 0 ? west : []), ...rooms, ...(index === parts.length ? east : [])]
-    return fitPitch(all.map(need), wants.mark, isDense)
+    return fitPitch(all.map(need), wants.mark, isDense, tagRows(wants.storeys, wants.strands.length))
   })
   const of = (rooms: readonly HouseRoom[]) => inside.map((needs) => needs.filter((each) => rooms.includes(each.room)))
   return { parts, inside: of(house), outsideLeft: of(west).flat(), outsideRight: of(east).flat() }
 }
 
 /** Widens rooms of a stretch, each no more than it must, until all its tags find a seat. */
-function fitPitch(needs: readonly ((pitch: number) => RoomNeed)[], mark: Wants['mark'], isDense: boolean): RoomNeed[] {
+function fitPitch(needs: readonly ((pitch: number) => RoomNeed)[], mark: Wants['mark'], isDense: boolean, rows: number): RoomNeed[] {
   if (isDense) return needs.map((need) => need(metrics.densePitch))
-  const pitches = needs.map((): number => metrics.slotPitch)
+  const pitches = needs.map((): number => (metrics.slotPitch * metrics.tag.rows) / rows)
   for (let tries = 0; ; tries++) {
     const tried = needs.map((need, index) => need(pitches[index]!))
     const wishes: (TagWish & { index: number })[] = []
@@ -132,7 +132,7 @@ function fitPitch(needs: readonly ((pitch: number) => RoomNeed)[], mark: Wants['
         if (text) wishes.push({ runId, x, ...text, index })
       }
     })
-    const { over } = seatTags(wishes, metrics.tag.rows, { left: 0, right: at + 2 })
+    const { over } = seatTags(wishes, rows, { left: 0, right: at + 2 })
     if (!over.length || tries > 60) return tried
     const tight = new Set(over.map((wish) => wish.index))
     for (const index of tight) pitches[index]! *= 1.04

@@ -23,6 +23,10 @@ export interface HouseRoom {
   readonly minX: number
   readonly maxX: number
   readonly centre: number
+  readonly minY: number
+  readonly maxY: number
+  /** How far east it is drawn of where it is, mm. */
+  readonly shift: number
   readonly fixtures: readonly Fixture[]
   readonly racks: readonly Rack[]
 }
@@ -66,21 +70,35 @@ interface Band {
 const nearlyLevel = 1500
 
 /** Levels about as high as each other that do not lie over each other, such as a guest house, share a band. */
-function inBands(levels: readonly Level[], rooms: ReadonlyMap<string, readonly HouseRoom[]>): Band[] {
+function inBands(levels: readonly Level[], rooms: Map<string, HouseRoom[]>): Band[] {
   const bands: Band[] = []
   for (const level of levels) {
-    const kind = kindOf(level, rooms.get(level.id) ?? [])
-    const band = bands.find((each) => kind === 'full' && each.kind === 'full' && each.levels[0]!.use === level.use && Math.abs(each.levels[0]!.elevationMm - level.elevationMm) < nearlyLevel && !lieOver(each.levels, level, rooms))
-    if (band) band.levels.push(level)
-    else bands.push({ kind, levels: [level], beside: [] })
+    const own = rooms.get(level.id) ?? []
+    const kind = kindOf(level, own)
+    const band = bands.find((each) => kind === 'full' && each.kind === 'full' && each.levels[0]!.use === level.use && Math.abs(each.levels[0]!.elevationMm - level.elevationMm) < nearlyLevel && !lieOver(each.levels, own, rooms))
+    if (!band) {
+      bands.push({ kind, levels: [level], beside: [] })
+      continue
+    }
+    rooms.set(level.id, setBeside(band.levels.flatMap((each) => rooms.get(each.id) ?? []), own))
+    band.levels.push(level)
   }
   return bands
 }
 
-function lieOver(levels: readonly Level[], level: Level, rooms: ReadonlyMap<string, readonly HouseRoom[]>): boolean {
-  const own = rooms.get(level.id) ?? []
+function lieOver(levels: readonly Level[], own: readonly HouseRoom[], rooms: ReadonlyMap<string, readonly HouseRoom[]>): boolean {
   const others = levels.flatMap((each) => rooms.get(each.id) ?? [])
-  return !own.length || !others.length || own.some((room) => others.some((other) => room.minX < other.maxX - 300 && other.minX < room.maxX - 300))
+  const slack = 300
+  return !own.length || !others.length || own.some((room) => others.some((other) => room.minX < other.maxX - slack && other.minX < room.maxX - slack && room.minY < other.maxY - slack && other.minY < room.maxY - slack))
+}
+
+/** A building behind or before another is drawn beside it, on the side it lies to. */
+function setBeside(others: readonly HouseRoom[], own: readonly HouseRoom[]): HouseRoom[] {
+  const [west, east] = [Math.min(...others.map((room) => room.minX)), Math.max(...others.map((room) => room.maxX))]
+  const [from, to] = [Math.min(...own.map((room) => room.minX)), Math.max(...own.map((room) => room.maxX))]
+  if (from >= east - 300 || to <= west + 300) return [...own]
+  const shift = (from + to) / 2 >= (west + east) / 2 ? east - from : west - to
+  return own.map((room) => ({ ...room, minX: room.minX + shift, maxX: room.maxX + shift, centre: room.centre + shift, shift }))
 }
 
 /** An attic or crawl with a rack in it is drawn with bays like any other level. */
@@ -107,10 +125,10 @@ function roomsByLevel(doc: JobDocument): Map<string, HouseRoom[]> {
   }
   const byLevel = new Map<string, HouseRoom[]>()
   for (const room of doc.records.room.values()) {
-    const { minX, maxX } = extentOf(room)
+    const { minX, maxX, minY, maxY } = extentOf(room)
     const own = (fixtures.get(room.id) ?? []).sort((a, b) => a.across - b.across || rank(a) - rank(b) || a.key.localeCompare(b.key))
     const racks = recordsOf(doc, 'rack').filter((rack) => rack.roomId === room.id).sort((a, b) => a.at.xMm - b.at.xMm || a.code.localeCompare(b.code))
-    const entry = { room, minX, maxX, centre: (minX + maxX) / 2, isOutside: isOutside(doc, room, own), fixtures: own, racks }
+    const entry = { room, minX, maxX, minY, maxY, shift: 0, centre: (minX + maxX) / 2, isOutside: isOutside(doc, room, own), fixtures: own, racks }
     byLevel.set(room.levelId, [...(byLevel.get(room.levelId) ?? []), entry])
   }
   return byLevel

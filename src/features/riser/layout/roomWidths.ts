@@ -1,6 +1,6 @@
 import { mmPerFoot } from '../../../../shared/units.ts'
 import { glyphSize } from './glyphs.ts'
-import { metrics } from './metrics.ts'
+import { metrics, monoWidth } from './metrics.ts'
 import type { Fixture, HouseRoom } from './readHouse.ts'
 import type { Exit } from './readTrips.ts'
 import type { Glyph } from './riserLayout.ts'
@@ -29,7 +29,7 @@ export function roomNeed(room: HouseRoom, { exits, glyphs }: Contents, pitch: nu
     const picture = glyph && !isDense ? Math.min(36, glyphSize(glyph, own.length)[0]) : 0
     return { fixture, exits: own, width: Math.max(own.length * pitch, own.length ? 0 : face, picture && picture > pitch * 1.6 ? picture : 0, isDense ? 0 : Math.min(face, pitch)) }
   })
-  if (!isDense) giveNeighboursRoom(blocks)
+  if (!isDense) giveNeighboursRoom(room.room.code, blocks)
   const content = 2 * pad + blocks.reduce((sum, block) => sum + block.width, 0)
   const nameWidth = 44 + Math.min(room.room.name.length, isDense ? 9 : 13) * 6.3
   const drawn = Math.min(isDense ? 130 : 240, Math.max(56, ((room.maxX - room.minX) / mmPerFoot) * metrics.planPxPerFoot * (isDense ? 0.6 : 1)))
@@ -38,17 +38,19 @@ export function roomNeed(room: HouseRoom, { exits, glyphs }: Contents, pitch: nu
 }
 
 /** Two plates about as high as each other stand far enough apart for both codes. */
-function giveNeighboursRoom(blocks: { fixture: Fixture; width: number }[]): void {
+function giveNeighboursRoom(code: string, blocks: { fixture: Fixture; width: number }[]): void {
   blocks.forEach((block, index) => {
     const next = blocks[index + 1]
     if (!next?.fixture.plate || !block.fixture.plate || Math.abs(block.fixture.up - next.fixture.up) > 0.16) return
-    const missing = codeRoom - (block.width + next.width) / 2
+    const codes = [block, next].map(({ fixture }) => monoWidth(`${code}${fixture.plate?.number ?? ''}`, codeFont))
+    const missing = Math.max(codeRoom, (codes[0]! + codes[1]!) / 2 + 4) - (block.width + next.width) / 2
     if (missing <= 0) return
     block.width += missing
     next.width += missing
   })
 }
 const codeRoom = 24
+const codeFont = 8.5
 
 /** Where each run comes down and where each fixture hangs, in a bay from x0 to x1. Extra width goes between fixtures. */
 export function spreadRoom(need: RoomNeed, x0: number, x1: number, slots: Map<Exit, number>, centres: Map<string, number>): void {

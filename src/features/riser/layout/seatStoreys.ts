@@ -4,7 +4,7 @@ import type { LocalTrip } from './localLanes.ts'
 import type { Placing } from './placeRooms.ts'
 import type { Storey } from './readHouse.ts'
 import type { RunMark } from './riserLayout.ts'
-import { seatTags, type TagSeat, type TagWish } from './tagRows.ts'
+import { seatTags, tagRows, type TagSeat, type TagWish } from './tagRows.ts'
 import type { FixturePlace } from './strands.ts'
 
 /** Tags of one storey's trunk, and of what leaves it upward or down the end wall. */
@@ -42,7 +42,7 @@ export function seatStoreys(storeys: readonly Storey[], placing: Placing, { lane
       const own = stretches.flatMap(({ from, to, limit }) => seatTags(all.filter((wish) => wish.x >= from && wish.x < to && !isOver(wish)), rows, limit, scale).seats)
       return [...own, ...seatTags(all.filter(isOver), rows, { left: 4, right: placing.width }, scale, own).seats]
     }
-    const seats = folds ? [] : inEach(down, metrics.tag.mostRows)
+    const seats = folds ? [] : inEach(down, tagRows(storeys, lanes.length) + metrics.tag.more)
     const up = inEach(roof, 3)
     const middle = (placing.edges[index]!.x0 + placing.edges[index]!.x1) / 2
     return {

@@ -1,5 +1,6 @@
 import type { Severity } from '../../../../shared/checks/finding.ts'
 import { metrics, monoWidth } from './metrics.ts'
+import type { Storey } from './readHouse.ts'
 
 export interface TagWish {
   readonly runId: string
@@ -15,6 +16,10 @@ export interface TagSeat extends TagWish {
   readonly row: number
   readonly flip: boolean
 }
+
+/** Rows of tags over a level: more where there is only one with many runs, which is wide and has all the height. */
+export const tagRows = (storeys: readonly Storey[], exits: number): number =>
+  storeys.filter((storey) => storey.kind === 'full').length === 1 && exits > metrics.tag.aloneOver ? metrics.tag.rowsAlone : metrics.tag.rows
 
 /** Width of a tag: the ring, the text, and the shape of its worst finding. */
 export const tagWidth = (text: string, severity: Severity | null): number =>
