@@ -37,8 +37,5 @@ export function rackAt(layout: RiserLayout, at: XY): { rack: RackBox; unit: Rack
   return rack && { rack, unit: rack.units.find((unit) => inside(at, unit)) }
 }
 
-/** The tag under a point. */
-export const tagAt = (layout: RiserLayout, at: XY) => layout.tags.find((tag) => inside(at, tag))
-
 /** The bay under a point. */
 export const bayAt = (layout: RiserLayout, at: XY) => layout.bays.find((bay) => inside(at, bay))

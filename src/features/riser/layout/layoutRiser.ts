@@ -68,7 +68,6 @@ export function layoutRiser(doc: JobDocument, options: LayoutOptions): RiserLayo
     folds: drawFolds(seats, heights, roomsOfRuns(doc, trips, places), depths),
     counts: drawCounts(lanes, heights, placing),
     tray: trips.filter((trip) => trip.kind === 'tray').map((trip) => trip.run.id),
-    walks: walksOf(lanes, locals),
   }
 }
 
@@ -115,13 +114,7 @@ function roomsOfRuns(doc: JobDocument, trips: readonly Trip[], places: ReadonlyM
   return rooms
 }
 
-function walksOf(lanes: ReturnType<typeof orderLanes>, locals: ReturnType<typeof localLanes>['locals']): string[][] {
-  const own = [...lanes.groups].sort((a, b) => b.corridor - a.corridor || a.side.localeCompare(b.side)).map((group) => group.lanes.map((lane) => lane.strand.trip.run.id))
-  const rest = locals.map((local) => local.trip.run.id)
-  return rest.length ? [...own, rest] : own
-}
-
 const emptyLayout = (tray: string[]): RiserLayout => ({
   width: 960, height: 600, isLarge: false, house: { ground: '', groundLine: '', earth: '', body: '', voids: [], slabs: '', posts: '', joists: '' },
-  storeys: [], captions: [], bays: [], plates: [], devices: [], racks: [], chases: [], runs: [], tags: [], closeTags: [], folds: [], counts: [], tray, walks: [],
+  storeys: [], captions: [], bays: [], plates: [], devices: [], racks: [], chases: [], runs: [], tags: [], closeTags: [], folds: [], counts: [], tray,
 })

@@ -165,8 +165,6 @@ export interface RiserLayout {
   readonly counts: readonly TrunkCount[]
   /** Runs with no end anywhere yet. */
   readonly tray: readonly string[]
-  /** Runs of each trunk in the order in which they leave it, nearest first. */
-  readonly walks: readonly (readonly string[])[]
 }
 
 /** What is written on a run's tag. */

@@ -1,5 +1,5 @@
 import { find, recordsOf, type JobDocument } from '../../../../shared/model/jobDocument.ts'
-import { rackIdOfEnd, roomOfDevice, roomOfEnd } from '../../../../shared/model/naming.ts'
+import { rackIdOfEnd, roomOfEnd } from '../../../../shared/model/naming.ts'
 import type { Connector } from '../../../../shared/model/place.ts'
 import type { RunEnd } from '../../../../shared/model/run.ts'
 import { fits } from './connectors.ts'
@@ -56,10 +56,4 @@ export function racksFor(doc: JobDocument, roomId: string): string[] {
     return (corner ? Math.hypot(rack.at.xMm - corner.xMm, rack.at.yMm - corner.yMm) : 0) + (isOtherLevel ? 5000 : 0)
   }
   return recordsOf(doc, 'rack').map((rack) => rack.id).sort((a, b) => (served.get(b) ?? 0) - (served.get(a) ?? 0) || distance(a) - distance(b))
-}
-
-/** Whether a device is a panel in a rack, so that a run may be dropped on it. */
-export const isRackPanel = (doc: JobDocument, deviceId: string): boolean => {
-  const device = find(doc, 'device', deviceId)
-  return device !== undefined && device.rackId !== null && roomOfDevice(doc, device) !== undefined && find(doc, 'deviceModel', device.modelId)?.category === 'panel'
 }

@@ -3,6 +3,7 @@ import { afterEach, describe, expect, it } from 'vitest'
 import { cableTypeFixtures } from '../../../../../fixtures/catalog/cableTypes.ts'
 import { deviceModelFixtures } from '../../../../../fixtures/catalog/deviceModels.ts'
 import type { Catalog } from '../../../../../shared/api/catalog.ts'
+import type { Item } from '../../../../../shared/commands/items.ts'
 import { find, recordsOf } from '../../../../../shared/model/jobDocument.ts'
 import { useSelectionStore } from '../../../../../src/features/job/selectionStore.ts'
 import RiserDialogs from '../../../../../src/features/riser/dialogs/RiserDialogs.vue'
@@ -22,7 +23,7 @@ afterEach(() => {
   document.body.innerHTML = ''
 })
 
-async function ask(dialog: DialogKind, doc = buildDoc(...smallHouse()), chosen: Parameters<ReturnType<typeof useSelectionStore>['choose']> = []) {
+async function ask(dialog: DialogKind, doc = buildDoc(...smallHouse()), chosen: readonly Item[] = []) {
   const job = await openJob(doc)
   useSelectionStore().choose(...chosen)
   useRiserStore().dialog = dialog
