@@ -33,7 +33,9 @@ export function createApp(deps: AppDeps, routes: readonly Route[] = buildRoutes(
   return app
 }
 
-/** While the server stops, each answer is the last on its connection, so that nobody asks on one that is about to close. */
+/**
+ * While the server stops, each answer is the last on its connection, so that nobody asks on one that is about to close.
+ */
 const lastAnswers =
   ({ closing }: Pick<AppDeps, 'closing'>): RequestHandler =>
   (_request, response, next) => {
@@ -52,7 +54,13 @@ const nothing: RequestHandler = () => {
 
 /** Every request gets a number; a line for each is written at level info. */
 const requestLog = ({ log }: Pick<AppDeps, 'log'>) =>
-  pinoHttp({ logger: log, genReqId: () => randomUUID(), quietReqLogger: true, redact: redactedPaths, customLogLevel: (_request, response) => (response.statusCode >= 500 ? 'warn' : 'info') })
+  pinoHttp({
+    logger: log,
+    genReqId: () => randomUUID(),
+    quietReqLogger: true,
+    redact: redactedPaths,
+    customLogLevel: (_request, response) => (response.statusCode >= 500 ? 'warn' : 'info'),
+  })
 
 const sessions = (deps: AppDeps) =>
   session({

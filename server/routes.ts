@@ -11,5 +11,12 @@ import { sessionRoutes } from './modules/session/routes.ts'
 /** Every route of the server. */
 export function buildRoutes(deps: AppDeps): readonly Route[] {
   const jobs = createJobsContext(deps)
-  return [...sessionRoutes, ...companyRoutes, ...memberRoutes, ...catalogRoutes, ...jobRoutes(jobs), ...exportRoutes(jobs)]
+  return [
+    ...sessionRoutes,
+    ...companyRoutes,
+    ...memberRoutes,
+    ...catalogRoutes,
+    ...jobRoutes(jobs),
+    ...exportRoutes(jobs),
+  ]
 }

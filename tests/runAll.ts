@@ -6,7 +6,10 @@ import { buildClientIfStale } from '../server/start/buildClient.ts'
 import { ensureInstalled } from '../server/start/installed.ts'
 import { projectFolder } from '../server/start/settings.ts'
 
-/** `npm test`: sets up what is missing, runs every stage whatever the one before it said, and ends with one line that counts. */
+/**
+ * `npm test`: sets up what is missing, runs every stage whatever the one before it said, and ends with one line that
+ * counts.
+ */
 
 interface Counted {
   readonly passed: number
@@ -59,26 +62,49 @@ function endGroup({ pid }: ChildProcess) {
 }
 
 /** A tool that only says yes or no counts as one test. */
-const tool = (command: string, ...args: string[]) => async () => ((await run(command, args)) === 0 ? ok : notOk)
+const tool =
+  (command: string, ...args: string[]) =>
+  async () =>
+    (await run(command, args)) === 0 ? ok : notOk
 
-/** Runs vitest projects and counts what they report. A run without a report, and a file that could not be run, have failed. */
+/**
+ * Runs vitest projects and counts what they report. A run without a report, and a file that could not be run, have
+ * failed.
+ */
 const vitest =
   (name: string, ...projects: string[]) =>
   async (): Promise<Counted> => {
     const file = join(reports, `${name}.json`)
     rmSync(file, { force: true })
     const chosen = projects.flatMap((project) => ['--project', project])
-    const code = await run(bin('vitest'), ['run', ...chosen, '--reporter=dot', '--reporter=json', `--outputFile.json=${file}`])
+    const code = await run(bin('vitest'), [
+      'run',
+      ...chosen,
+      '--reporter=dot',
+      '--reporter=json',
+      `--outputFile.json=${file}`,
+    ])
     const report = reportSchema.parse(JSON.parse(readFileSync(file, 'utf8')))
-    const broken = report.testResults.filter((result) => result.status === 'failed' && result.assertionResults.length === 0)
+    const broken = report.testResults.filter(
+      (result) => result.status === 'failed' && result.assertionResults.length === 0,
+    )
     for (const { name: path } of broken) say(`Could not be run: ${path}`)
     const failed = report.numFailedTests + broken.length
     return { passed: report.numPassedTests, failed: code !== 0 && failed === 0 ? 1 : failed }
   }
 
 const install = async () => {
-  const needed = { 'mariadb-server': 'mariadbd', chromium: 'chromium', 'poppler-utils': 'pdftoppm', 'zbar-tools': 'zbarimg', 'libreoffice-calc': 'soffice' }
-  ensureInstalled(Object.entries(needed).map(([name, program]) => ({ package: name, program })), say)
+  const needed = {
+    'mariadb-server': 'mariadbd',
+    chromium: 'chromium',
+    'poppler-utils': 'pdftoppm',
+    'zbar-tools': 'zbarimg',
+    'libreoffice-calc': 'soffice',
+  }
+  ensureInstalled(
+    Object.entries(needed).map(([name, program]) => ({ package: name, program })),
+    say,
+  )
   mkdirSync(reports, { recursive: true })
   // Programs that are there are no test.
   return { passed: 0, failed: 0 }
@@ -113,9 +139,10 @@ for (const [name, work] of stages) {
     console.error(error instanceof Error ? error.message : error)
     return notOk
   })
+  const seconds = Math.round((Date.now() - start) / 1000)
   total.passed += counted.passed
   total.failed += counted.failed
-  summary.push(`${name.padEnd(20)} ${counted.passed} passed, ${counted.failed} failed, ${Math.round((Date.now() - start) / 1000)} s`)
+  summary.push(`${name.padEnd(20)} ${counted.passed} passed, ${counted.failed} failed, ${seconds} s`)
   say(`== ${summary.at(-1)}`)
 }
 say(`\n${summary.join('\n')}\n`)

@@ -1,7 +1,10 @@
 import { sql } from 'drizzle-orm'
 import type { Db } from './client.ts'
 
-/** What the server must promise so that nothing acknowledged is lost when the power goes (MariaDB's documentation of these variables). */
+/**
+ * What the server must promise so that nothing acknowledged is lost when the power goes (MariaDB's documentation of
+ * these variables).
+ */
 const wanted: Record<string, { readonly good: (value: string) => boolean; readonly need: string }> = {
   '@@GLOBAL.innodb_flush_log_at_trx_commit': { good: (value) => value === '1', need: '1' },
   '@@GLOBAL.innodb_doublewrite': { good: (value) => isOn(value) || value === 'fast', need: 'ON' },
@@ -22,6 +25,8 @@ export async function durabilityFaults(db: Db): Promise<string[]> {
   const [rows] = (await db.execute(sql.raw(`SELECT ${columns.join(', ')}`))) as unknown as [Record<string, unknown>[]]
   return Object.entries(wanted).flatMap(([name, { good, need }], index) => {
     const value = String(rows[0]?.[`v${index}`])
-    return good(value) ? [] : [`${name.replace(/^@@(GLOBAL|SESSION)?\.?/, '').replace(/^IF.*/, 'sync_binlog')} is ${value}, not ${need}`]
+    return good(value)
+      ? []
+      : [`${name.replace(/^@@(GLOBAL|SESSION)?\.?/, '').replace(/^IF.*/, 'sync_binlog')} is ${value}, not ${need}`]
   })
 }

@@ -33,7 +33,8 @@ export function openDatabase(url: string, connectionLimit = 10, onStatement?: (s
   })
   // Read-modify-write must fail rather than lose an update; a statement that runs away is stopped by the server too.
   pool.pool.on('connection', (connection: NewConnection) => {
-    const settings = `innodb_snapshot_isolation = ON, SESSION max_statement_time = ${(statementDeadlineMs - 100) / 1000}, SESSION time_zone = '+00:00'`
+    const seconds = (statementDeadlineMs - 100) / 1000
+    const settings = `innodb_snapshot_isolation = ON, max_statement_time = ${seconds}, time_zone = '+00:00'`
     // A connection without these promises is not one to work on; the start-up check then says which are missing.
     connection.query(`SET SESSION ${settings}`, (error) => error && connection.destroy())
   })

@@ -27,7 +27,8 @@ class NoConnection extends Error {
 export function withDeadlines(pool: Pool, { connectionMs, statementMs }: Deadlines): Pool {
   const acquire = pool.getConnection.bind(pool)
 
-  const getConnection = async (): Promise<PoolConnection> => limitStatements(await inTime(acquire(), connectionMs), statementMs)
+  const getConnection = async (): Promise<PoolConnection> =>
+    limitStatements(await inTime(acquire(), connectionMs), statementMs)
 
   const query = async (...given: Parameters<PoolConnection['query']>) => {
     const connection = await getConnection()

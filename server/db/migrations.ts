@@ -28,6 +28,11 @@ export function readSteps(folder: string = migrationsFolder): Step[] {
         .split('--> statement-breakpoint')
         .map((statement) => statement.trim())
         .filter((statement) => statement !== '')
-        .map((statement, position) => ({ migration: tag, position, statement, digest: createHash('sha256').update(statement).digest('hex') })),
+        .map((statement, position) => ({
+          migration: tag,
+          position,
+          statement,
+          digest: createHash('sha256').update(statement).digest('hex'),
+        })),
     )
 }

@@ -5,7 +5,8 @@ import { isTransient } from './errors.ts'
 const mostTries = 5
 
 /** Runs work in one transaction, and again when another transaction was in the way. All of it is kept, or none. */
-export const inTransaction = <T>(db: Db, work: (tx: Tx) => Promise<T>): Promise<T> => retried(() => db.transaction(work))
+export const inTransaction = <T>(db: Db, work: (tx: Tx) => Promise<T>): Promise<T> =>
+  retried(() => db.transaction(work))
 
 /** Runs one statement, which is a transaction of its own, and again when another transaction was in the way. */
 export async function retried<T>(work: () => Promise<T>): Promise<T> {

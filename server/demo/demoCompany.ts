@@ -30,7 +30,12 @@ const rules: WorkingRules = {
   limits: defaultLimits,
 }
 
-const member = (role: Role, name: string, domain: string): DemoMember => ({ id: `${domain.split('.')[0]}-${role}`, name, email: `${role}@${domain}`, role })
+const member = (role: Role, name: string, domain: string): DemoMember => ({
+  id: `${domain.split('.')[0]}-${role}`,
+  name,
+  email: `${role}@${domain}`,
+  role,
+})
 
 export const demoCompanies: readonly DemoCompany[] = [
   {
@@ -50,12 +55,18 @@ export const demoCompanies: readonly DemoCompany[] = [
     id: 'quoin-batten',
     name: 'Quoin & Batten Systems',
     rules: { ...rules, lengthUnit: 'm', conductorUnit: 'mm2', slackRackMm: 3000, slackPlateMm: 500 },
-    members: [member('owner', 'Quill Barrow', 'quoinbatten.example'), member('designer', 'Quincy Dell', 'quoinbatten.example')],
+    members: [
+      member('owner', 'Quill Barrow', 'quoinbatten.example'),
+      member('designer', 'Quincy Dell', 'quoinbatten.example'),
+    ],
   },
 ]
 
 /** The demo sign-ins, as the start command prints them. */
 export function demoSignIns(): string {
-  const lines = demoCompanies.flatMap((company) => [company.name, ...company.members.map((each) => `  ${each.role.padEnd(11)} ${each.email}`)])
+  const lines = demoCompanies.flatMap((company) => [
+    company.name,
+    ...company.members.map((each) => `  ${each.role.padEnd(11)} ${each.email}`),
+  ])
   return [`Demo sign-ins, for looking round only, all with the passphrase "${demoPassphrase}":`, ...lines].join('\n')
 }

@@ -16,6 +16,8 @@ export function serveClient(app: Express, folder: string): void {
     response.sendFile(join(folder, 'index.html'))
   }
   app.use('/assets', express.static(join(folder, 'assets'), { immutable: true, maxAge: '365d', index: false }))
-  app.use(express.static(folder, { index: false, setHeaders: (response) => response.setHeader('Cache-Control', 'no-cache') }))
+  app.use(
+    express.static(folder, { index: false, setHeaders: (response) => response.setHeader('Cache-Control', 'no-cache') }),
+  )
   app.use(page)
 }

@@ -41,7 +41,10 @@ export const nothingHere = () => new AppError('not_found', 'There is nothing at 
 
 /** Answers with problem details (RFC 9457). */
 function sendProblem(request: Request, response: Response, problem: Omit<Problem, 'requestId'>): void {
-  response.status(problem.status).type('application/problem+json').json({ ...problem, requestId: String(request.id) } satisfies Problem)
+  response
+    .status(problem.status)
+    .type('application/problem+json')
+    .json({ ...problem, requestId: String(request.id) } satisfies Problem)
 }
 
 function problemOf(error: AppError): Omit<Problem, 'requestId'> {
@@ -65,21 +68,30 @@ function setRetryAfter(response: Response, error: AppError): void {
 /** Turns whatever went wrong into an error the product knows; undefined: it is a fault of ours. */
 function knownError(error: unknown): AppError | undefined {
   if (error instanceof AppError) return error
-  if (isUnavailable(error)) return new AppError('unavailable', 'The database does not answer just now. Nothing is lost; try again in a moment')
+  if (isUnavailable(error))
+    return new AppError('unavailable', 'The database does not answer just now. Nothing is lost; try again in a moment')
   const { type, status, expose } = error as { type?: string; status?: number; expose?: boolean }
-  if (type === 'entity.too.large') return new AppError('too_large', `A request carries at most ${bodyLimitBytes / 1024 / 1024} MB. Send it in smaller pieces`)
+  if (type === 'entity.too.large')
+    return new AppError(
+      'too_large',
+      `A request carries at most ${bodyLimitBytes / 1024 / 1024} MB. Send it in smaller pieces`,
+    )
   if (type === 'entity.parse.failed') return new AppError('invalid', 'The request is not JSON that can be read')
-  if (type === 'encoding.unsupported' || type === 'charset.unsupported') return new AppError('media_type', 'Send JSON in UTF-8, and not compressed in a way the server does not know')
+  if (type === 'encoding.unsupported' || type === 'charset.unsupported')
+    return new AppError('media_type', 'Send JSON in UTF-8, and not compressed in a way the server does not know')
   // What Express and its parsers refuse carries `expose`; an error of ours that happens to have a status does not.
   if (expose && status === 404) return nothingHere()
-  if (expose && status !== undefined && status >= 400 && status < 500) return new AppError('invalid', 'The request cannot be read')
+  if (expose && status !== undefined && status >= 400 && status < 500)
+    return new AppError('invalid', 'The request cannot be read')
   if (error instanceof URIError) return new AppError('invalid', 'The address cannot be read')
   return undefined
 }
 
 /** Says where input is not valid: at most ten places, never the input itself. */
 export function invalidInput(error: ZodError, where: string): AppError {
-  const errors = error.issues.slice(0, 10).map(({ path, message }) => ({ where: [where, ...path.map(String)].join('.'), message }))
+  const errors = error.issues
+    .slice(0, 10)
+    .map(({ path, message }) => ({ where: [where, ...path.map(String)].join('.'), message }))
   const first = errors[0]
   return new AppError('invalid', first ? `${first.message} (${first.where})` : 'That is not valid', { errors })
 }
@@ -100,7 +112,12 @@ export const problemHandler =
     // What was to be a file is now a refusal.
     response.removeHeader('Content-Disposition')
     if (!known) {
-      sendProblem(request, response, { type: '/problems/internal', title: 'Something went wrong', status: 500, detail: 'Something went wrong on our side. Try again; if it happens again, tell us the number of this request' })
+      sendProblem(request, response, {
+        type: '/problems/internal',
+        title: 'Something went wrong',
+        status: 500,
+        detail: 'Something went wrong on our side. Try again; if it happens again, tell us the number of this request',
+      })
       return
     }
     setRetryAfter(response, known)

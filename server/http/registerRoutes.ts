@@ -16,13 +16,17 @@ export function registerRoutes(app: Express, routes: readonly Route[], deps: App
     const name = nameOf(route)
     if (seen.has(name)) throw new Error(`Two routes are ${name}`)
     seen.add(name)
-    if (route.action !== 'public' && !actions.includes(route.action)) throw new Error(`${name} has no action of the policy`)
-    for (const part of ['params', 'query', 'body'] as const) if (typeof route[part]?.safeParse !== 'function') throw new Error(`${name} has no schema for its ${part}`)
+    if (route.action !== 'public' && !actions.includes(route.action))
+      throw new Error(`${name} has no action of the policy`)
+    for (const part of ['params', 'query', 'body'] as const)
+      if (typeof route[part]?.safeParse !== 'function') throw new Error(`${name} has no schema for its ${part}`)
     app[route.method](route.path, handlerOf(route, deps))
   }
 }
 
-/** What Express keeps of one entry of its stack: a route, or a middleware that may be a router with a stack of its own. */
+/**
+ * What Express keeps of one entry of its stack: a route, or a middleware that may be a router with a stack of its own.
+ */
 interface Layer {
   readonly name: string
   readonly route?: { readonly path: unknown; readonly methods: Readonly<Record<string, boolean>> }
@@ -39,15 +43,19 @@ export function assertOnlyTable(app: Express, routes: readonly Route[]): void {
   }
   const stray = found.find((name) => !table.has(name))
   if (stray !== undefined) throw new Error(`${stray} is not in the route table`)
-  if (found.length !== table.size) throw new Error(`The route table has ${table.size} routes, the application ${found.length}`)
+  if (found.length !== table.size)
+    throw new Error(`The route table has ${table.size} routes, the application ${found.length}`)
 }
 
 function handlerOf(route: Route, deps: AppDeps): RequestHandler {
   return async (request, response) => {
     const member = route.action === 'public' ? undefined : await whoAsks(request, deps)
     if (member && route.action !== 'public' && !can(member.role, route.action))
-      throw new AppError('forbidden', `A ${member.role} may not do this. Ask the owner of the company`, { action: route.action })
-    if (request.method !== 'GET' && hasBody(request) && !request.is('application/json')) throw new AppError('media_type', 'Send JSON')
+      throw new AppError('forbidden', `A ${member.role} may not do this. Ask the owner of the company`, {
+        action: route.action,
+      })
+    if (request.method !== 'GET' && hasBody(request) && !request.is('application/json'))
+      throw new AppError('media_type', 'Send JSON')
     const input = {
       params: parse(route.params, request.params, 'address'),
       query: parse(route.query, request.query, 'query'),
@@ -61,7 +69,8 @@ function handlerOf(route: Route, deps: AppDeps): RequestHandler {
   }
 }
 
-const hasBody = (request: Parameters<RequestHandler>[0]) => Number(request.headers['content-length'] ?? 0) > 0 || request.headers['transfer-encoding'] !== undefined
+const hasBody = (request: Parameters<RequestHandler>[0]) =>
+  Number(request.headers['content-length'] ?? 0) > 0 || request.headers['transfer-encoding'] !== undefined
 
 function parse(schema: Route['body'], value: unknown, where: string): unknown {
   const parsed = schema.safeParse(value)

@@ -41,7 +41,9 @@ interface Shape<Params extends z.ZodType, Query extends z.ZodType, Body extends 
   readonly params: Params
   readonly query: Query
   readonly body: Body
-  /** What may leave the server: fields it does not name are left out, an answer that does not fit is a fault of ours. */
+  /**
+   * What may leave the server: fields it does not name are left out, an answer that does not fit is a fault of ours.
+   */
   readonly response?: z.ZodType
 }
 
@@ -54,14 +56,23 @@ export interface Route {
   readonly query: z.ZodType
   readonly body: z.ZodType
   readonly response?: z.ZodType
-  readonly handle: (context: PublicContext & { readonly member?: SignedIn }, input: RouteInput<unknown, unknown, unknown>) => Promise<unknown>
+  readonly handle: (
+    context: PublicContext & { readonly member?: SignedIn },
+    input: RouteInput<unknown, unknown, unknown>,
+  ) => Promise<unknown>
 }
 
-/** A route for members who may do `action`. The only way to add one: a route without an action or schemas does not compile, and does not start. */
+/**
+ * A route for members who may do `action`. The only way to add one: a route without an action or schemas does not
+ * compile, and does not start.
+ */
 export function defineRoute<Params extends z.ZodType, Query extends z.ZodType, Body extends z.ZodType>(
   shape: Shape<Params, Query, Body> & {
     readonly action: Action
-    readonly handle: (context: MemberContext, input: RouteInput<z.output<Params>, z.output<Query>, z.output<Body>>) => Promise<unknown>
+    readonly handle: (
+      context: MemberContext,
+      input: RouteInput<z.output<Params>, z.output<Query>, z.output<Body>>,
+    ) => Promise<unknown>
   },
 ): Route {
   return shape as unknown as Route
@@ -70,7 +81,10 @@ export function defineRoute<Params extends z.ZodType, Query extends z.ZodType, B
 /** A route for anybody: signing in, and asking who one is. */
 export function definePublicRoute<Params extends z.ZodType, Query extends z.ZodType, Body extends z.ZodType>(
   shape: Shape<Params, Query, Body> & {
-    readonly handle: (context: PublicContext, input: RouteInput<z.output<Params>, z.output<Query>, z.output<Body>>) => Promise<unknown>
+    readonly handle: (
+      context: PublicContext,
+      input: RouteInput<z.output<Params>, z.output<Query>, z.output<Body>>,
+    ) => Promise<unknown>
   },
 ): Route {
   return { ...shape, action: 'public' } as unknown as Route

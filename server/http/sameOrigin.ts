@@ -9,7 +9,8 @@ export const sameOrigin: RequestHandler = (request, _response, next) => {
   if (request.method === 'GET' || request.method === 'HEAD') return next()
   const site = request.get('sec-fetch-site')
   const origin = request.get('origin')
-  const fromElsewhere = site !== undefined ? site !== 'same-origin' : origin !== undefined && hostOf(origin) !== request.get('host')
+  const fromElsewhere =
+    site !== undefined ? site !== 'same-origin' : origin !== undefined && hostOf(origin) !== request.get('host')
   if (fromElsewhere) throw new AppError('forbidden', 'This request came from another site, so it was not done')
   next()
 }

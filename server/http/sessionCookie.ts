@@ -5,4 +5,5 @@ import type { AppDeps } from './deps.ts'
 export const sessionCookieName = ({ secure }: Pick<AppDeps, 'secure'>) => (secure ? '__Host-mudring' : 'mudring')
 
 /** How the cookie is set, and cleared: browsers clear one only when told with the same words. */
-export const sessionCookieOptions = ({ secure }: Pick<AppDeps, 'secure'>) => ({ httpOnly: true, sameSite: 'lax', secure, path: '/' }) as const satisfies CookieOptions
+export const sessionCookieOptions = ({ secure }: Pick<AppDeps, 'secure'>) =>
+  ({ httpOnly: true, sameSite: 'lax', secure, path: '/' }) as const satisfies CookieOptions

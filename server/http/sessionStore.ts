@@ -30,7 +30,14 @@ export class DatabaseSessionStore extends session.Store {
   }
   override set(id: string, data: session.SessionData, done?: (error?: unknown) => void): void {
     const now = Date.now()
-    const row = { idHash: hashOf(id), companyId: data.companyId ?? null, memberId: data.memberId ?? null, data: JSON.stringify(data), createdAt: data.startedAt ?? now, idleUntil: now + idleMs }
+    const row = {
+      idHash: hashOf(id),
+      companyId: data.companyId ?? null,
+      memberId: data.memberId ?? null,
+      data: JSON.stringify(data),
+      createdAt: data.startedAt ?? now,
+      idleUntil: now + idleMs,
+    }
     writeSession(this.db, row).then(() => done?.(), done)
   }
   override destroy(id: string, done?: (error?: unknown) => void): void {

@@ -10,7 +10,8 @@ export const clientFolder = join(projectFolder, 'dist')
 
 /**
  * Builds the client when what it is made of has changed since it was last built. It is built beside its place and
- * moved there when whole, so that a server that is running never serves half of it. Throws an Error with the tool's words.
+ * moved there when whole, so that a server that is running never serves half of it. Throws an Error with the words of
+ * the tool.
  */
 export async function buildClientIfStale(say: (line: string) => void): Promise<void> {
   const digest = digestOf(inputs)
@@ -19,16 +20,30 @@ export async function buildClientIfStale(say: (line: string) => void): Promise<v
   const draft = join(projectFolder, '.tsbuild', `client-${process.pid}`)
   try {
     // In a process of its own: the tool's memory is not kept by the server that starts next.
-    await promisify(execFile)(process.execPath, [join(projectFolder, 'node_modules/vite/bin/vite.js'), 'build', '--outDir', draft, '--emptyOutDir', '--logLevel', 'warn'], {
-      cwd: projectFolder,
-      env: { ...process.env, NODE_ENV: 'production', NO_COLOR: '1' },
-      maxBuffer: 16 * 1024 * 1024,
-    })
+    await promisify(execFile)(
+      process.execPath,
+      [
+        join(projectFolder, 'node_modules/vite/bin/vite.js'),
+        'build',
+        '--outDir',
+        draft,
+        '--emptyOutDir',
+        '--logLevel',
+        'warn',
+      ],
+      {
+        cwd: projectFolder,
+        env: { ...process.env, NODE_ENV: 'production', NO_COLOR: '1' },
+        maxBuffer: 16 * 1024 * 1024,
+      },
+    )
     writeFileSync(join(draft, '.built-from'), digest)
     putInPlace(draft, digest)
   } catch (error) {
     const { stderr, stdout } = error as { stderr?: string; stdout?: string }
-    throw new Error(`The client could not be built:\n${firstLines(stderr || stdout || String(error))}`, { cause: error })
+    throw new Error(`The client could not be built:\n${firstLines(stderr || stdout || String(error))}`, {
+      cause: error,
+    })
   } finally {
     rmSync(draft, { recursive: true, force: true })
   }
@@ -53,7 +68,9 @@ function builtFrom(folder: string): string | undefined {
 
 function digestOf(paths: readonly string[]): string {
   const hash = createHash('sha256')
-  for (const path of paths) for (const file of filesUnder(join(projectFolder, path))) hash.update(file.slice(projectFolder.length)).update('\0').update(readFileSync(file)).update('\0')
+  for (const path of paths)
+    for (const file of filesUnder(join(projectFolder, path)))
+      hash.update(file.slice(projectFolder.length)).update('\0').update(readFileSync(file)).update('\0')
   return hash.digest('hex')
 }
 

@@ -1,10 +1,25 @@
-import { chmodSync, closeSync, existsSync, fsyncSync, mkdirSync, openSync, readdirSync, readFileSync, renameSync, rmSync, writeSync } from 'node:fs'
+import {
+  chmodSync,
+  closeSync,
+  existsSync,
+  fsyncSync,
+  mkdirSync,
+  openSync,
+  readdirSync,
+  readFileSync,
+  renameSync,
+  rmSync,
+  writeSync,
+} from 'node:fs'
 import { join } from 'node:path'
 import { z } from 'zod'
 
 const secretFile = 'session-secret'
 
-/** Makes the private folder, or takes one that is Mudring's already. Throws an Error rather than move in with other files. */
+/**
+ * Makes the private folder, or takes one that is Mudring's already. Throws an Error rather than move in with other
+ * files.
+ */
 export function prepareDataFolder(folder: string): void {
   mkdirSync(folder, { recursive: true, mode: 0o700 })
   const inside = readdirSync(folder)
@@ -40,7 +55,10 @@ export function holdDataFolder(folder: string): () => void {
   const file = join(folder, 'running.json')
   const holder = existsSync(file) ? readHolder(file) : undefined
   if (holder && holder.pid !== process.pid && startOf(holder.pid) === holder.since)
-    throw new Error(`Mudring is running already on ${folder} (process ${holder.pid}). Stop it first, or set MUDRING_DATA to another folder`)
+    throw new Error(
+      `Mudring is running already on ${folder} (process ${holder.pid}). ` +
+        'Stop it first, or set MUDRING_DATA to another folder',
+    )
   writePrivately(file, JSON.stringify({ pid: process.pid, since: startOf(process.pid) ?? '' }))
   return () => rmSync(file, { force: true })
 }

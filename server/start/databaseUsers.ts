@@ -7,11 +7,16 @@ export const applicationUser = 'mudring'
 /** May also change the schema. Used by migrations, and by tests to make schemas of their own. */
 export const migrationUser = 'mudring_schema'
 
-/** The account of the data folder's owner: made by mariadb-install-db for whoever ran it, let in by the socket alone. */
+/**
+ * The account of the data folder's owner: made by mariadb-install-db for whoever ran it, let in by the socket alone.
+ */
 export const ownerAccount = () => userInfo().username
 
 /** Makes the schema and the two users, each with no more than it needs, on schemas of that name and no others. */
-export async function prepareUsers(owner: Connection, passwords: { readonly application: string; readonly migration: string }): Promise<void> {
+export async function prepareUsers(
+  owner: Connection,
+  passwords: { readonly application: string; readonly migration: string },
+): Promise<void> {
   await owner.query(`CREATE DATABASE IF NOT EXISTS ${schema} CHARACTER SET utf8mb4 COLLATE utf8mb4_unicode_ci`)
   await prepare(owner, applicationUser, passwords.application, 'SELECT, INSERT, UPDATE, DELETE')
   await prepare(owner, migrationUser, passwords.migration, 'ALL PRIVILEGES')

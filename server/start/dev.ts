@@ -27,7 +27,9 @@ async function end(child: ChildProcess): Promise<void> {
   await gone
 }
 
-/** Waits for the server's first answer. One that ends before has said why; the next change of its code starts it again. */
+/**
+ * Waits for the server's first answer. One that ends before has said why; the next change of its code starts it again.
+ */
 async function untilAnswering(address: string, child: ChildProcess): Promise<void> {
   for (let tries = 0; tries < 300 && !hasEnded(child); tries++) {
     const answers = await fetch(`${address}/api/session`).then(
@@ -53,9 +55,13 @@ try {
     DATABASE_MIGRATION_URL: database.migrationUrl,
   })
   await untilAnswering(apiAddress, api)
-  const client = tool('vite/bin/vite.js', ['--host', '127.0.0.1', '--port', String(settings.port), '--strictPort', '--clearScreen', 'false'], {
-    MUDRING_API: apiAddress,
-  })
+  const client = tool(
+    'vite/bin/vite.js',
+    ['--host', '127.0.0.1', '--port', String(settings.port), '--strictPort', '--clearScreen', 'false'],
+    {
+      MUDRING_API: apiAddress,
+    },
+  )
   say(`\nMudring, with hot reload, is at http://127.0.0.1:${settings.port}\n\n${demoSignIns()}\n`)
   const stop = async () => {
     await Promise.all([end(client), end(api)])

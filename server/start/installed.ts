@@ -23,27 +23,43 @@ export function ensureInstalled(needed: readonly Needed[], say: (line: string) =
   if (!missing.length) return
   const byHand = `sudo apt-get install --no-install-recommends ${missing.join(' ')}`
   const asRoot = rootCommand()
-  if (!asRoot || !findProgram('apt-get')) throw new Error(`Please install ${missing.join(', ')} and start again. On Debian or Ubuntu: ${byHand}`)
+  if (!asRoot || !findProgram('apt-get'))
+    throw new Error(`Please install ${missing.join(', ')} and start again. On Debian or Ubuntu: ${byHand}`)
   say(`Installing ${missing.join(', ')}`)
   const apt = (...args: string[]) => {
-    const [command, ...rest] = [...asRoot, 'env', 'DEBIAN_FRONTEND=noninteractive', 'apt-get', '-o', 'DPkg::Lock::Timeout=500', ...args]
+    const [command, ...rest] = [
+      ...asRoot,
+      'env',
+      'DEBIAN_FRONTEND=noninteractive',
+      'apt-get',
+      '-o',
+      'DPkg::Lock::Timeout=500',
+      ...args,
+    ]
     execFileSync(command!, rest, { stdio: ['ignore', 'ignore', 'inherit'] })
   }
   try {
     apt('update', '-qq')
     withoutServices(asRoot, () => apt('install', '-y', '-qq', '--no-install-recommends', ...missing))
   } catch (error) {
-    throw new Error(`Could not install ${missing.join(', ')}. Install by hand and start again: ${byHand}`, { cause: error })
+    throw new Error(`Could not install ${missing.join(', ')}. Install by hand and start again: ${byHand}`, {
+      cause: error,
+    })
   }
 }
 
 /** What to put before a command so that it runs as root; undefined where that would ask for a password. */
 function rootCommand(): string[] | undefined {
   if (process.getuid?.() === 0) return []
-  return findProgram('sudo') && spawnSync('sudo', ['-n', 'true'], { stdio: 'ignore' }).status === 0 ? ['sudo', '-n'] : undefined
+  return findProgram('sudo') && spawnSync('sudo', ['-n', 'true'], { stdio: 'ignore' }).status === 0
+    ? ['sudo', '-n']
+    : undefined
 }
 
-/** Debian asks this file before it starts a service of a package: Mudring starts its database by itself, on its own folder. */
+/**
+ * Debian asks this file before it starts a service of a package: Mudring starts its database by itself, on its own
+ * folder.
+ */
 const servicePolicy = '/usr/sbin/policy-rc.d'
 
 function withoutServices(asRoot: readonly string[], work: () => void) {

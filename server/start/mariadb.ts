@@ -12,7 +12,11 @@ import { findProgram } from './installed.ts'
 import { samePortIfFree } from './ports.ts'
 
 /** What is remembered of a data folder's database between two starts. */
-const rememberedSchema = z.object({ port: z.int().min(1).max(65_535), password: z.string().min(20), migrationPassword: z.string().min(20) })
+const rememberedSchema = z.object({
+  port: z.int().min(1).max(65_535),
+  password: z.string().min(20),
+  migrationPassword: z.string().min(20),
+})
 type Remembered = z.output<typeof rememberedSchema>
 
 export interface RunningDatabase {
@@ -25,19 +29,36 @@ export interface RunningDatabase {
 }
 
 const always = [
-  '--bind-address=127.0.0.1', '--skip-name-resolve', '--skip-log-bin', '--character-set-server=utf8mb4', '--collation-server=utf8mb4_unicode_ci', '--default-time-zone=+00:00', '--max-allowed-packet=64M',
-  '--sql-mode=STRICT_TRANS_TABLES,ERROR_FOR_DIVISION_BY_ZERO,NO_ENGINE_SUBSTITUTION,ONLY_FULL_GROUP_BY', '--innodb-snapshot-isolation=ON', '--innodb-rollback-on-timeout=ON',
+  '--bind-address=127.0.0.1',
+  '--skip-name-resolve',
+  '--skip-log-bin',
+  '--character-set-server=utf8mb4',
+  '--collation-server=utf8mb4_unicode_ci',
+  '--default-time-zone=+00:00',
+  '--max-allowed-packet=64M',
+  '--sql-mode=STRICT_TRANS_TABLES,ERROR_FOR_DIVISION_BY_ZERO,NO_ENGINE_SUBSTITUTION,ONLY_FULL_GROUP_BY',
+  '--innodb-snapshot-isolation=ON',
+  '--innodb-rollback-on-timeout=ON',
 ]
 /** What keeps every acknowledged commit through a power cut (MariaDB's documentation of these variables). */
 const durable = ['--innodb-flush-log-at-trx-commit=1', '--innodb-doublewrite=1']
 /** For tests on a folder that is thrown away: quick to start and stop, and durable against nothing. */
-const throwAway = ['--innodb-flush-log-at-trx-commit=0', '--innodb-doublewrite=0', '--innodb-fast-shutdown=2', '--innodb-log-file-size=8M', '--innodb-buffer-pool-size=64M']
+const throwAway = [
+  '--innodb-flush-log-at-trx-commit=0',
+  '--innodb-doublewrite=0',
+  '--innodb-fast-shutdown=2',
+  '--innodb-log-file-size=8M',
+  '--innodb-buffer-pool-size=64M',
+]
 
 /**
  * Starts MariaDB as a child of this process on a private folder, on loopback, with users of its own for the
  * application; prepares the folder the first time. What a killed predecessor left behind is recovered.
  */
-export async function startMariadb(folder: string, options: { readonly throwAway?: boolean } = {}): Promise<RunningDatabase> {
+export async function startMariadb(
+  folder: string,
+  options: { readonly throwAway?: boolean } = {},
+): Promise<RunningDatabase> {
   const data = join(folder, 'data')
   const pidFile = join(folder, 'mariadb.pid')
   mkdirSync(folder, { recursive: true, mode: 0o700 })
@@ -51,7 +72,17 @@ export async function startMariadb(folder: string, options: { readonly throwAway
   const socket = socketOf(folder)
   const child = spawn(
     findProgram('mariadbd') ?? 'mariadbd',
-    ['--no-defaults', ...asUser, `--datadir=${data}`, `--socket=${socket}`, `--pid-file=${pidFile}`, `--port=${port}`, `--log-error=${join(folder, 'mariadb.log')}`, ...always, ...(options.throwAway ? throwAway : durable)],
+    [
+      '--no-defaults',
+      ...asUser,
+      `--datadir=${data}`,
+      `--socket=${socket}`,
+      `--pid-file=${pidFile}`,
+      `--port=${port}`,
+      `--log-error=${join(folder, 'mariadb.log')}`,
+      ...always,
+      ...(options.throwAway ? throwAway : durable),
+    ],
     // Its own group: Ctrl-C reaches this process first, which stops the database last.
     { stdio: 'ignore', detached: true },
   )
@@ -80,7 +111,18 @@ function prepareFolder(data: string, asUser: readonly string[]) {
   const draft = `${data}.new`
   rmSync(draft, { recursive: true, force: true })
   rmSync(data, { recursive: true, force: true })
-  execFileSync('mariadb-install-db', ['--no-defaults', ...asUser, `--datadir=${draft}`, '--auth-root-authentication-method=socket', `--auth-root-socket-user=${ownerAccount()}`, '--skip-test-db'], { stdio: ['ignore', 'ignore', 'pipe'] })
+  execFileSync(
+    'mariadb-install-db',
+    [
+      '--no-defaults',
+      ...asUser,
+      `--datadir=${draft}`,
+      '--auth-root-authentication-method=socket',
+      `--auth-root-socket-user=${ownerAccount()}`,
+      '--skip-test-db',
+    ],
+    { stdio: ['ignore', 'ignore', 'pipe'] },
+  )
   chmodSync(draft, 0o700)
   renameSync(draft, data)
 }
@@ -99,7 +141,9 @@ function remember(folder: string): Remembered | undefined {
   }
 }
 
-/** A server that a killed predecessor left running on this folder is stopped first: two on one folder would destroy it. */
+/**
+ * A server that a killed predecessor left running on this folder is stopped first: two on one folder would destroy it.
+ */
 async function stopPredecessor(pidFile: string) {
   if (!existsSync(pidFile)) return
   const pid = Number(readFileSync(pidFile, 'utf8').trim())
@@ -107,7 +151,8 @@ async function stopPredecessor(pidFile: string) {
   if (!isOurs()) return
   process.kill(pid, 'SIGTERM')
   for (let tries = 0; tries < 600 && isOurs(); tries++) await pause(50)
-  if (isOurs()) throw new Error(`A database server of an earlier start does not stop (process ${pid}). Stop it and start again`)
+  if (isOurs())
+    throw new Error(`A database server of an earlier start does not stop (process ${pid}). Stop it and start again`)
 }
 
 function commandOf(pid: number): string {
@@ -116,11 +161,13 @@ function commandOf(pid: number): string {
 }
 
 async function connectAsOwner(child: ChildProcess, socket: string, folder: string): Promise<mysql.Connection> {
+  const log = join(folder, 'mariadb.log')
   let fault: Error | undefined
   child.once('error', (error) => (fault = error))
   for (let tries = 0; tries < 1200; tries++) {
     if (fault) throw new Error(`MariaDB could not be started: ${fault.message}`)
-    if (child.exitCode !== null || child.signalCode !== null) throw new Error(`MariaDB did not start. Its own words are in ${join(folder, 'mariadb.log')}:\n${lastLines(join(folder, 'mariadb.log'))}`)
+    if (child.exitCode !== null || child.signalCode !== null)
+      throw new Error(`MariaDB did not start. Its own words are in ${log}:\n${lastLines(log)}`)
     try {
       return await mysql.createConnection({ socketPath: socket, user: ownerAccount() })
     } catch (error) {
@@ -132,7 +179,8 @@ async function connectAsOwner(child: ChildProcess, socket: string, folder: strin
   throw new Error('MariaDB did not answer within a minute')
 }
 
-const lastLines = (file: string) => (existsSync(file) ? readFileSync(file, 'utf8').trimEnd().split('\n').slice(-4).join('\n') : '')
+const lastLines = (file: string) =>
+  existsSync(file) ? readFileSync(file, 'utf8').trimEnd().split('\n').slice(-4).join('\n') : ''
 
 async function stopChild(child: ChildProcess, socket: string, folder: string) {
   if (child.pid !== undefined && child.exitCode === null && child.signalCode === null) {

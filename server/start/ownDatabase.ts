@@ -9,9 +9,12 @@ export interface DatabaseHere extends DatabaseUrls {
   readonly gone: Promise<void>
 }
 
-/** The database of the settings: one that exists, or a server of our own on the data folder, which nobody else may hold. */
+/**
+ * The database of the settings: one that exists, or a server of our own on the data folder, which nobody else may hold.
+ */
 export async function databaseOf(settings: Settings, say: (line: string) => void): Promise<DatabaseHere> {
-  if (settings.database) return { ...settings.database, stop: async () => undefined, gone: new Promise(() => undefined) }
+  if (settings.database)
+    return { ...settings.database, stop: async () => undefined, gone: new Promise(() => undefined) }
   ensureInstalled([{ package: 'mariadb-server', program: 'mariadbd' }], say)
   const letGo = holdDataFolder(settings.dataFolder)
   try {

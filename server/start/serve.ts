@@ -23,7 +23,10 @@ export interface Serving {
 const bcryptCost = 12
 
 /** Everything behind the address: database, migration, demo company, application. Throws an Error with a sentence. */
-export async function serve(settings: Settings, options: { readonly clientFolder: string | null; readonly say: (line: string) => void }): Promise<Serving> {
+export async function serve(
+  settings: Settings,
+  options: { readonly clientFolder: string | null; readonly say: (line: string) => void },
+): Promise<Serving> {
   await assertPortFree(settings.port)
   const closing = new AbortController()
   // Every open stream listens for it.
@@ -42,13 +45,24 @@ export async function serve(settings: Settings, options: { readonly clientFolder
     await migrateDatabase(here.migrationUrl)
     database = openDatabase(here.url)
     const faults = await durabilityFaults(database.db)
-    if (faults.length) throw new Error(`The database would not keep what it acknowledged: ${faults.join('; ')}. Mudring does not serve on such a database`)
+    if (faults.length)
+      throw new Error(
+        `The database would not keep what it acknowledged, so Mudring does not serve on it: ${faults.join('; ')}`,
+      )
     const deps: AppDeps = {
-      db: database.db, log: createLogger(settings.logLevel), sessionSecret: settings.sessionSecret, secure: settings.secure,
-      clientFolder: options.clientFolder, bcryptCost, closing: closing.signal,
+      db: database.db,
+      log: createLogger(settings.logLevel),
+      sessionSecret: settings.sessionSecret,
+      secure: settings.secure,
+      clientFolder: options.clientFolder,
+      bcryptCost,
+      closing: closing.signal,
     }
     await loadDemo(deps, options.say)
-    server = await listen(createServer({ requestTimeout: 60_000, headersTimeout: 10_000 }, createApp(deps)), settings.port)
+    server = await listen(
+      createServer({ requestTimeout: 60_000, headersTimeout: 10_000 }, createApp(deps)),
+      settings.port,
+    )
     return { address: `http://127.0.0.1:${settings.port}`, stop, databaseGone: here.gone }
   } catch (error) {
     await stop()

@@ -13,7 +13,8 @@ try {
   await assertPortFree(settings.port)
   await buildClientIfStale(say)
   const { address, stop, databaseGone } = await serve(settings, { clientFolder, say })
-  say(`\nMudring is at ${address}\n\n${demoSignIns()}\n\nStop with Ctrl-C. ${settings.database ? 'Data is kept in the database of DATABASE_URL' : `Data is kept in ${settings.dataFolder}`}`)
+  const kept = settings.database ? 'the database of DATABASE_URL' : settings.dataFolder
+  say(`\nMudring is at ${address}\n\n${demoSignIns()}\n\nStop with Ctrl-C. Data is kept in ${kept}`)
   await untilStopped(stop, databaseGone, say)
 } catch (error) {
   failStart(error)

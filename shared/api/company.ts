@@ -3,7 +3,10 @@ import { nameSchema } from '../model/fields.ts'
 import { workingRulesSchema, type WorkingRules } from '../model/job.ts'
 
 /** PATCH /api/company: what is to change, and the version it was read at. */
-export const updateCompanySchema = workingRulesSchema.extend({ name: nameSchema }).partial().extend({ version: z.int().min(1) })
+export const updateCompanySchema = workingRulesSchema
+  .extend({ name: nameSchema })
+  .partial()
+  .extend({ version: z.int().min(1) })
 export type UpdateCompany = z.input<typeof updateCompanySchema>
 
 /** GET /api/company */

@@ -1,6 +1,9 @@
 import { z } from 'zod'
 
-/** Every answer that is not a success: problem details (RFC 9457) with the code of shared/errors.ts as the type's last part. */
+/**
+ * Every answer that is not a success: problem details (RFC 9457) with the code of shared/errors.ts as the type's last
+ * part.
+ */
 export const problemSchema = z.object({
   /** "/problems/not-found" and so on. */
   type: z.string(),

@@ -17,7 +17,10 @@ export const signInSchema = z.strictObject({
 export type SignIn = z.input<typeof signInSchema>
 
 /** PUT /api/session/passphrase: one's own. */
-export const changePassphraseSchema = z.strictObject({ current: signInSchema.shape.passphrase, passphrase: passphraseSchema })
+export const changePassphraseSchema = z.strictObject({
+  current: signInSchema.shape.passphrase,
+  passphrase: passphraseSchema,
+})
 export type ChangePassphrase = z.input<typeof changePassphraseSchema>
 
 /** Who is signed in, where, and what they may do. */

@@ -9,7 +9,9 @@ export function expectProblem(response: Response, status: number): Problem {
   const problem = problemSchema.strict().parse(response.body)
   expect(problem.status).toBe(status)
   expect(problem.requestId).toMatch(/^[0-9a-f-]{36}$/)
-  expect(JSON.stringify(response.body)).not.toMatch(/node_modules|\bat .+:\d+:\d+|SELECT |INSERT |UPDATE |mysql|drizzle/i)
+  expect(JSON.stringify(response.body)).not.toMatch(
+    /node_modules|\bat .+:\d+:\d+|SELECT |INSERT |UPDATE |mysql|drizzle/i,
+  )
   return problem
 }
 

@@ -38,15 +38,27 @@ const addCable = ({ owner }: ProbeWorld) =>
 const addModel = ({ owner }: ProbeWorld) =>
   made(owner.post('/api/catalog/device-models').send({ id: freshId('model'), description }))
 const addMember = ({ owner }: ProbeWorld, id = freshId('member')) =>
-  made(owner.post('/api/members').send({ id, name: 'Wren Alder', email: `${id}@larkhook.example`, role: 'technician', passphrase }))
+  made(
+    owner
+      .post('/api/members')
+      .send({ id, name: 'Wren Alder', email: `${id}@larkhook.example`, role: 'technician', passphrase }),
+  )
 
 /** One for each route of the server, by method and path. A route without one fails the test that uses them. */
 export const routeProbes: Readonly<Record<string, MakeProbe>> = {
-  'post /api/session': () => ({ path: '/api/session', body: { email: 'lead@larkhook.example', passphrase: demoPassphrase }, status: 200 }),
+  'post /api/session': () => ({
+    path: '/api/session',
+    body: { email: 'lead@larkhook.example', passphrase: demoPassphrase },
+    status: 200,
+  }),
   'get /api/session': () => ({ path: '/api/session', status: 200 }),
   'delete /api/session': () => ({ path: '/api/session', status: 204 }),
   // The same passphrase again: whoever may change theirs keeps it for the next probe.
-  'put /api/session/passphrase': () => ({ path: '/api/session/passphrase', body: { current: demoPassphrase, passphrase: demoPassphrase }, status: 204 }),
+  'put /api/session/passphrase': () => ({
+    path: '/api/session/passphrase',
+    body: { current: demoPassphrase, passphrase: demoPassphrase },
+    status: 204,
+  }),
 
   'get /api/company': () => ({ path: '/api/company', status: 200 }),
   'patch /api/company': async ({ owner }) => {
@@ -57,21 +69,60 @@ export const routeProbes: Readonly<Record<string, MakeProbe>> = {
   'get /api/members': () => ({ path: '/api/members', status: 200 }),
   'post /api/members': () => {
     const id = freshId('member')
-    return { path: '/api/members', body: { id, name: 'Wren Alder', email: `${id}@probe.example`, role: 'lead', passphrase }, status: 200 }
+    return {
+      path: '/api/members',
+      body: { id, name: 'Wren Alder', email: `${id}@probe.example`, role: 'lead', passphrase },
+      status: 200,
+    }
   },
-  'patch /api/members/:memberId': async (world) => ({ path: `/api/members/${(await addMember(world)).id}`, body: { name: 'Wren Ash' }, status: 200, absent: 404 }),
+  'patch /api/members/:memberId': async (world) => ({
+    path: `/api/members/${(await addMember(world)).id}`,
+    body: { name: 'Wren Ash' },
+    status: 200,
+    absent: 404,
+  }),
 
   'get /api/catalog': () => ({ path: '/api/catalog', status: 200 }),
-  'post /api/catalog/cable-types': () => ({ path: '/api/catalog/cable-types', body: { id: freshId('cable'), description: cable() }, status: 200 }),
-  'put /api/catalog/cable-types/:id': async (world) => ({ path: `/api/catalog/cable-types/${(await addCable(world)).id}`, body: { version: 1, description: cable() }, status: 200, absent: 404 }),
+  'post /api/catalog/cable-types': () => ({
+    path: '/api/catalog/cable-types',
+    body: { id: freshId('cable'), description: cable() },
+    status: 200,
+  }),
+  'put /api/catalog/cable-types/:id': async (world) => ({
+    path: `/api/catalog/cable-types/${(await addCable(world)).id}`,
+    body: { version: 1, description: cable() },
+    status: 200,
+    absent: 404,
+  }),
   // Removing what is gone already is as good as removing it.
-  'delete /api/catalog/cable-types/:id': async (world) => ({ path: `/api/catalog/cable-types/${(await addCable(world)).id}?version=1`, status: 204, absent: 204 }),
-  'post /api/catalog/device-models': () => ({ path: '/api/catalog/device-models', body: { id: freshId('model'), description }, status: 200 }),
-  'put /api/catalog/device-models/:id': async (world) => ({ path: `/api/catalog/device-models/${(await addModel(world)).id}`, body: { version: 1, description }, status: 200, absent: 404 }),
-  'delete /api/catalog/device-models/:id': async (world) => ({ path: `/api/catalog/device-models/${(await addModel(world)).id}?version=1`, status: 204, absent: 204 }),
+  'delete /api/catalog/cable-types/:id': async (world) => ({
+    path: `/api/catalog/cable-types/${(await addCable(world)).id}?version=1`,
+    status: 204,
+    absent: 204,
+  }),
+  'post /api/catalog/device-models': () => ({
+    path: '/api/catalog/device-models',
+    body: { id: freshId('model'), description },
+    status: 200,
+  }),
+  'put /api/catalog/device-models/:id': async (world) => ({
+    path: `/api/catalog/device-models/${(await addModel(world)).id}`,
+    body: { version: 1, description },
+    status: 200,
+    absent: 404,
+  }),
+  'delete /api/catalog/device-models/:id': async (world) => ({
+    path: `/api/catalog/device-models/${(await addModel(world)).id}?version=1`,
+    status: 204,
+    absent: 204,
+  }),
 
   'get /api/jobs': () => ({ path: '/api/jobs', status: 200 }),
-  'post /api/jobs': () => ({ path: '/api/jobs', body: { id: freshId('job'), name: 'Tern Cottage', client: '', address: '' }, status: 200 }),
+  'post /api/jobs': () => ({
+    path: '/api/jobs',
+    body: { id: freshId('job'), name: 'Tern Cottage', client: '', address: '' },
+    status: 200,
+  }),
   'get /api/jobs/:jobId': ({ jobId }) => ({ path: `/api/jobs/${jobId}`, status: 200, absent: 404 }),
   // A command that anybody may send is answered 200; what it may touch is judged on its change, and tested there.
   'post /api/jobs/:jobId/commands': ({ jobId }) => ({
@@ -80,13 +131,34 @@ export const routeProbes: Readonly<Record<string, MakeProbe>> = {
     status: 200,
     absent: 404,
   }),
-  'get /api/jobs/:jobId/changes': ({ jobId }) => ({ path: `/api/jobs/${jobId}/changes?since=0`, status: 200, absent: 404 }),
-  'get /api/jobs/:jobId/events': ({ jobId }) => ({ path: `/api/jobs/${jobId}/events`, status: 200, absent: 404, endless: true }),
+  'get /api/jobs/:jobId/changes': ({ jobId }) => ({
+    path: `/api/jobs/${jobId}/changes?since=0`,
+    status: 200,
+    absent: 404,
+  }),
+  'get /api/jobs/:jobId/events': ({ jobId }) => ({
+    path: `/api/jobs/${jobId}/events`,
+    status: 200,
+    absent: 404,
+    endless: true,
+  }),
 
-  'get /api/jobs/:jobId/schedule.xlsx': ({ jobId }) => ({ path: `/api/jobs/${jobId}/schedule.xlsx`, status: 200, absent: 404 }),
+  'get /api/jobs/:jobId/schedule.xlsx': ({ jobId }) => ({
+    path: `/api/jobs/${jobId}/schedule.xlsx`,
+    status: 200,
+    absent: 404,
+  }),
   'post /api/jobs/:jobId/labels.pdf': ({ jobId }) => ({
     path: `/api/jobs/${jobId}/labels.pdf`,
-    body: { runIds: ['r1'], copiesAtRack: 1, copiesAtPlate: 1, choice: 'letter-30', startAt: 1, offsetXMm: 0, offsetYMm: 0 },
+    body: {
+      runIds: ['r1'],
+      copiesAtRack: 1,
+      copiesAtPlate: 1,
+      choice: 'letter-30',
+      startAt: 1,
+      offsetXMm: 0,
+      offsetYMm: 0,
+    },
     status: 200,
     absent: 404,
   }),
@@ -95,5 +167,7 @@ export const routeProbes: Readonly<Record<string, MakeProbe>> = {
 /** The same request for something that never was. */
 export const forNothing = (probe: Probe, world: ProbeWorld): Probe => ({
   ...probe,
-  path: probe.path.replace(/(\/(?:members|cable-types|device-models)\/)[^/?]+/, '$1never-was').replace(`/jobs/${world.jobId}`, '/jobs/never-was'),
+  path: probe.path
+    .replace(/(\/(?:members|cable-types|device-models)\/)[^/?]+/, '$1never-was')
+    .replace(`/jobs/${world.jobId}`, '/jobs/never-was'),
 })

@@ -15,9 +15,16 @@ export interface StartedServer {
 }
 
 /** Starts a script of server/start; `environment` names port and data folder. It may still be starting. */
-export function startServer(script: 'start.ts' | 'api.ts', environment: Readonly<Record<string, string>>): StartedServer {
+export function startServer(
+  script: 'start.ts' | 'api.ts',
+  environment: Readonly<Record<string, string>>,
+): StartedServer {
   const { DATABASE_URL: _url, DATABASE_MIGRATION_URL: _migrationUrl, ...inherited } = process.env
-  const child = spawn(process.execPath, ['--import', 'tsx', join('server/start', script)], { cwd: projectFolder, env: { ...inherited, ...environment }, stdio: ['ignore', 'pipe', 'pipe'] })
+  const child = spawn(process.execPath, ['--import', 'tsx', join('server/start', script)], {
+    cwd: projectFolder,
+    env: { ...inherited, ...environment },
+    stdio: ['ignore', 'pipe', 'pipe'],
+  })
   let said = ''
   child.stdout.on('data', (part: Buffer) => (said += part.toString()))
   child.stderr.on('data', (part: Buffer) => (said += part.toString()))
@@ -36,7 +43,13 @@ export async function untilServing(server: StartedServer, patienceMs = 60_000): 
   void server.ended.then(() => (over = true))
   while (Date.now() < end) {
     if (over) throw new Error(`The server ended:\n${server.said()}`)
-    if (await fetch(`${server.address}/api/session`).then(() => true, () => false)) return
+    if (
+      await fetch(`${server.address}/api/session`).then(
+        () => true,
+        () => false,
+      )
+    )
+      return
     await pause(50)
   }
   throw new Error(`The server did not answer within ${patienceMs / 1000} s:\n${server.said()}`)
@@ -46,5 +59,7 @@ export async function untilServing(server: StartedServer, patienceMs = 60_000): 
 export function databaseProcessOf(folder: string): number | undefined {
   const file = join(folder, 'mariadb.pid')
   const pid = existsSync(file) ? Number(readFileSync(file, 'utf8')) : undefined
-  return pid && existsSync(`/proc/${pid}`) && readFileSync(`/proc/${pid}/cmdline`, 'utf8').includes(folder) ? pid : undefined
+  return pid && existsSync(`/proc/${pid}`) && readFileSync(`/proc/${pid}/cmdline`, 'utf8').includes(folder)
+    ? pid
+    : undefined
 }

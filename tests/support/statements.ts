@@ -1,5 +1,6 @@
 /** Tables whose rows belong to a company, out of the statements that were run on them. */
-const touched = (statement: string) => [...statement.matchAll(/\b(?:from|into|update|join)\s+`(\w+)`/gi)].map((match) => match[1]!)
+const touched = (statement: string) =>
+  [...statement.matchAll(/\b(?:from|into|update|join)\s+`(\w+)`/gi)].map((match) => match[1]!)
 
 /** Signing in finds the company by the address; it is the only read that cannot know the company before. */
 const findsTheCompany = /^select .* from `members` where `members`\.`email` = \?$/i

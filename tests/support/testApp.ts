@@ -30,9 +30,15 @@ export async function startTestApp(changed: Partial<AppDeps> = {}): Promise<Test
   const closing = new AbortController()
   setMaxListeners(0, closing.signal)
   const deps: AppDeps = {
-    db: database.db, log: pino({ level: 'silent' }), sessionSecret: 'a secret of the tests', secure: false, clientFolder: null,
+    db: database.db,
+    log: pino({ level: 'silent' }),
+    sessionSecret: 'a secret of the tests',
+    secure: false,
+    clientFolder: null,
     // Quick hashes: what is tested is not how long they take.
-    bcryptCost: 4, closing: closing.signal, ...changed,
+    bcryptCost: 4,
+    closing: closing.signal,
+    ...changed,
   }
   await insertDemoCompanies(deps)
   const app = createApp(deps)

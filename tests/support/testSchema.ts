@@ -16,7 +16,11 @@ export async function makeSchema(): Promise<TestSchema> {
   const base = inject('migrationUrl')
   const name = `${new URL(base).pathname.slice(1)}_${randomBytes(6).toString('hex')}`
   await runAt(base, `CREATE DATABASE \`${name}\` CHARACTER SET utf8mb4 COLLATE utf8mb4_unicode_ci`)
-  return { url: onSchema(inject('databaseUrl'), name), migrationUrl: onSchema(base, name), drop: () => runAt(base, `DROP DATABASE IF EXISTS \`${name}\``) }
+  return {
+    url: onSchema(inject('databaseUrl'), name),
+    migrationUrl: onSchema(base, name),
+    drop: () => runAt(base, `DROP DATABASE IF EXISTS \`${name}\``),
+  }
 }
 
 function onSchema(base: string, name: string): string {

@@ -1,4 +1,14 @@
-import { boolean, datetime, foreignKey, int, mysqlEnum, mysqlTable, primaryKey, unique, varchar } from 'drizzle-orm/mysql-core'
+import {
+  boolean,
+  datetime,
+  foreignKey,
+  int,
+  mysqlEnum,
+  mysqlTable,
+  primaryKey,
+  unique,
+  varchar,
+} from 'drizzle-orm/mysql-core'
 import { conductorUnits, lengthUnits } from '../../../shared/model/job.ts'
 import type { Limits } from '../../../shared/model/limits.ts'
 import { roles } from '../../../shared/policy.ts'
@@ -17,7 +27,10 @@ export const companies = mysqlTable('companies', {
   limits: jsonColumn<Limits>('limits').notNull(),
 })
 
-/** A person in a company. An address signs in to one company only. A member who leaves is disabled, since records bear the name. */
+/**
+ * A person in a company. An address signs in to one company only. A member who leaves is disabled, since records bear
+ * the name.
+ */
 export const members = mysqlTable(
   'members',
   {

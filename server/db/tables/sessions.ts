@@ -1,7 +1,9 @@
 import { bigint, index, int, mysqlTable, text, varchar } from 'drizzle-orm/mysql-core'
 import { idColumn } from '../columns.ts'
 
-/** Signed-in sessions, by the hash of their id: whoever reads the table cannot take one over. Times in ms since 1970. */
+/**
+ * Signed-in sessions, by the hash of their id: whoever reads the table cannot take one over. Times in ms since 1970.
+ */
 export const sessions = mysqlTable(
   'sessions',
   {

@@ -11,8 +11,16 @@ export async function readCompany(db: Session, companyId: string): Promise<Compa
 }
 
 /** Writes what changed if nobody was quicker; false: somebody was. */
-export async function writeCompany(db: Session, companyId: string, version: number, set: Partial<Omit<CompanyAnswer, 'id' | 'version'>>): Promise<boolean> {
-  const [result] = await db.update(companies).set({ ...set, version: sql`${companies.version} + 1` }).where(and(eq(companies.id, companyId), eq(companies.version, version)))
+export async function writeCompany(
+  db: Session,
+  companyId: string,
+  version: number,
+  set: Partial<Omit<CompanyAnswer, 'id' | 'version'>>,
+): Promise<boolean> {
+  const [result] = await db
+    .update(companies)
+    .set({ ...set, version: sql`${companies.version} + 1` })
+    .where(and(eq(companies.id, companyId), eq(companies.version, version)))
   return result.affectedRows === 1
 }
 

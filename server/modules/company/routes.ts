@@ -4,7 +4,15 @@ import { defineRoute, noInput, type MemberContext } from '../../http/routeTable.
 import { readCompany, writeCompany } from './companyRepo.ts'
 
 export const companyRoutes = [
-  defineRoute({ method: 'get', path: '/api/company', action: 'company.read', params: noInput, query: noInput, body: noInput, handle: (context) => companyOf(context) }),
+  defineRoute({
+    method: 'get',
+    path: '/api/company',
+    action: 'company.read',
+    params: noInput,
+    query: noInput,
+    body: noInput,
+    handle: (context) => companyOf(context),
+  }),
   defineRoute({
     method: 'patch',
     path: '/api/company',
@@ -16,7 +24,10 @@ export const companyRoutes = [
       const { version, ...given } = body
       const set = Object.fromEntries(Object.entries(given).filter(([, value]) => value !== undefined))
       if (!(await writeCompany(context.db, context.member.companyId, version, set)))
-        throw new AppError('conflict', 'Somebody else has changed the company’s settings since you opened them', { current: await companyOf(context), mine: set })
+        throw new AppError('conflict', 'Somebody else has changed the company’s settings since you opened them', {
+          current: await companyOf(context),
+          mine: set,
+        })
       return companyOf(context)
     },
   }),

@@ -13,7 +13,15 @@ export const memberRoutes = [
     body: noInput,
     handle: async ({ db, member }) => ({ members: await listMembers(db, member.companyId) }),
   }),
-  defineRoute({ method: 'post', path: '/api/members', action: 'member.manage', params: noInput, query: noInput, body: addMemberSchema, handle: (context, { body }) => addMember(context, body) }),
+  defineRoute({
+    method: 'post',
+    path: '/api/members',
+    action: 'member.manage',
+    params: noInput,
+    query: noInput,
+    body: addMemberSchema,
+    handle: (context, { body }) => addMember(context, body),
+  }),
   defineRoute({
     method: 'patch',
     path: '/api/members/:memberId',

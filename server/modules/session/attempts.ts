@@ -12,7 +12,10 @@ export const mostAttempts = {
   pair: 10,
   /** From one address with any e-mail: an office shares one. */
   address: 60,
-  /** With one e-mail from anywhere: many who guess together. Far above the pair's, so that one guesser cannot keep the owner out. */
+  /**
+   * With one e-mail from anywhere: many who guess together. Far above the pair's, so that one guesser cannot keep the
+   * owner out.
+   */
   email: 100,
 }
 
@@ -42,6 +45,8 @@ export async function countAttempt(db: Db, email: string, address: string): Prom
 const subjectOf = (kind: string, value: string) => `${kind}:${createHash('sha256').update(value).digest('base64url')}`
 
 const tooMany = (retryAfterSeconds: number) =>
-  new AppError('too_many', `Too many attempts that did not fit. Wait ${minutes(retryAfterSeconds)}, then try again`, { retryAfterSeconds })
+  new AppError('too_many', `Too many attempts that did not fit. Wait ${minutes(retryAfterSeconds)}, then try again`, {
+    retryAfterSeconds,
+  })
 
 const minutes = (seconds: number) => (seconds <= 60 ? 'a minute' : `${Math.ceil(seconds / 60)} minutes`)

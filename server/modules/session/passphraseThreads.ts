@@ -2,7 +2,8 @@ import { Worker } from 'node:worker_threads'
 import { AppError } from '../../../shared/errors.ts'
 
 /** A passphrase to hash at a cost, or to hold against a hash. */
-export type Question = { readonly passphrase: string; readonly cost: number } | { readonly passphrase: string; readonly hash: string }
+export type Question =
+  { readonly passphrase: string; readonly cost: number } | { readonly passphrase: string; readonly hash: string }
 type Answer = string | boolean
 
 /** Hashing is slow on purpose; on threads of its own it keeps nobody else waiting. */
@@ -22,7 +23,12 @@ let threads = 0
 
 /** Answers by another thread. Throws AppError unavailable when too many wait. */
 export function askThread(question: Question): Promise<Answer> {
-  if (waiting.length >= mostWaiting) return Promise.reject(new AppError('unavailable', 'Too many people are signing in at this moment. Try again in a few seconds', { retryAfterSeconds: 3 }))
+  if (waiting.length >= mostWaiting)
+    return Promise.reject(
+      new AppError('unavailable', 'Too many people are signing in at this moment. Try again in a few seconds', {
+        retryAfterSeconds: 3,
+      }),
+    )
   return new Promise((done, fail) => {
     waiting.push({ question, done, fail })
     next()

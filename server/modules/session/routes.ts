@@ -3,7 +3,13 @@ import { changePassphraseSchema, signInSchema, type SessionAnswer } from '../../
 import { AppError } from '../../../shared/errors.ts'
 import { actionsOf } from '../../../shared/policy.ts'
 import {
-  answered, definePublicRoute, defineRoute, noInput, type PublicContext, type Route, type SignedIn,
+  answered,
+  definePublicRoute,
+  defineRoute,
+  noInput,
+  type PublicContext,
+  type Route,
+  type SignedIn,
 } from '../../http/routeTable.ts'
 import { sessionCookieName, sessionCookieOptions } from '../../http/sessionCookie.ts'
 import { readCompany } from '../company/companyRepo.ts'
@@ -14,7 +20,11 @@ import { endSession, startSession } from './startSession.ts'
 /** Signing in and out, who one is, and one's own passphrase. */
 export const sessionRoutes: readonly Route[] = [
   definePublicRoute({
-    method: 'post', path: '/api/session', params: noInput, query: noInput, body: signInSchema,
+    method: 'post',
+    path: '/api/session',
+    params: noInput,
+    query: noInput,
+    body: signInSchema,
     handle: async (context, { body }) => {
       const member = await signIn(context, body)
       await startSession(context.request, member)
@@ -22,12 +32,21 @@ export const sessionRoutes: readonly Route[] = [
     },
   }),
   defineRoute({
-    method: 'get', path: '/api/session', action: 'session.read', params: noInput, query: noInput, body: noInput,
+    method: 'get',
+    path: '/api/session',
+    action: 'session.read',
+    params: noInput,
+    query: noInput,
+    body: noInput,
     handle: (context) => answer(context, context.member),
   }),
   // Signing out twice, or after the session has ended, is still signing out.
   definePublicRoute({
-    method: 'delete', path: '/api/session', params: noInput, query: noInput, body: z.unknown(),
+    method: 'delete',
+    path: '/api/session',
+    params: noInput,
+    query: noInput,
+    body: z.unknown(),
     handle: async ({ deps, request, response }) => {
       await endSession(request)
       response.clearCookie(sessionCookieName(deps), sessionCookieOptions(deps)).status(204).end()
@@ -35,7 +54,12 @@ export const sessionRoutes: readonly Route[] = [
     },
   }),
   defineRoute({
-    method: 'put', path: '/api/session/passphrase', action: 'session.update', params: noInput, query: noInput, body: changePassphraseSchema,
+    method: 'put',
+    path: '/api/session/passphrase',
+    action: 'session.update',
+    params: noInput,
+    query: noInput,
+    body: changePassphraseSchema,
     handle: (context, { body }) => changePassphrase(context, body),
   }),
 ]

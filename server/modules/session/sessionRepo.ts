@@ -28,26 +28,44 @@ export async function deleteEndedSessions(db: Session, now: number): Promise<voi
   await db.delete(signInAttempts).where(lt(signInAttempts.windowEnds, now))
 }
 
-/** Who an address belongs to, for signing in: the only query that is not scoped by a company, since it finds the company. */
+/**
+ * Who an address belongs to, for signing in: the only query that is not scoped by a company, since it finds the
+ * company.
+ */
 export async function findByEmail(db: Session, email: string) {
   const [row] = await db.select().from(members).where(eq(members.email, email))
-  // The column's collation takes é for e, so that nobody can add a look-alike; signing in takes the address as it is written.
+  // The column's collation takes é for e, so that nobody can add a look-alike; signing in takes the address as it is
+  // written.
   return row?.email === email ? row : undefined
 }
 
-export async function writePassphraseHash(db: Session, companyId: string, memberId: string, passphraseHash: string): Promise<void> {
-  await db.update(members).set({ passphraseHash }).where(and(eq(members.companyId, companyId), eq(members.id, memberId)))
+export async function writePassphraseHash(
+  db: Session,
+  companyId: string,
+  memberId: string,
+  passphraseHash: string,
+): Promise<void> {
+  await db
+    .update(members)
+    .set({ passphraseHash })
+    .where(and(eq(members.companyId, companyId), eq(members.id, memberId)))
 }
 
 /** The member of a session with the company; undefined when disabled or gone. */
 export async function readSignedIn(db: Session, companyId: string, memberId: string) {
   const [row] = await db
-    .select({ companyId: members.companyId, id: members.id, name: members.name, email: members.email, role: members.role, disabled: members.disabled })
+    .select({
+      companyId: members.companyId,
+      id: members.id,
+      name: members.name,
+      email: members.email,
+      role: members.role,
+      disabled: members.disabled,
+    })
     .from(members)
     .where(and(eq(members.companyId, companyId), eq(members.id, memberId)))
   return row && !row.disabled ? row : undefined
 }
-
 
 /** Attempts of one who tries, known by a hash: the table names nobody. */
 export interface AttemptCount {
@@ -63,13 +81,18 @@ export async function takeAttempt(db: Session, subject: string, now: number, win
   // MariaDB assigns from left to right: the count is decided before the window moves.
   const [rows] = (await db.execute(sql`
     insert into sign_in_attempts (subject, attempts, window_ends) values (${subject}, 1, ${now + windowMs})
-    on duplicate key update attempts = if(window_ends <= ${now}, 1, attempts + 1), window_ends = if(window_ends <= ${now}, ${now + windowMs}, window_ends)
+    on duplicate key update
+      attempts = if(window_ends <= ${now}, 1, attempts + 1),
+      window_ends = if(window_ends <= ${now}, ${now + windowMs}, window_ends)
     returning attempts, window_ends as windowEnds`)) as unknown as [AttemptCount[]]
   return { attempts: Number(rows[0]!.attempts), windowEnds: Number(rows[0]!.windowEnds) }
 }
 /** Gives one attempt back: it fitted. */
 export async function giveBackAttempt(db: Session, subject: string): Promise<void> {
-  await db.update(signInAttempts).set({ attempts: sql`greatest(${signInAttempts.attempts} - 1, 0)` }).where(eq(signInAttempts.subject, subject))
+  await db
+    .update(signInAttempts)
+    .set({ attempts: sql`greatest(${signInAttempts.attempts} - 1, 0)` })
+    .where(eq(signInAttempts.subject, subject))
 }
 export async function clearAttempts(db: Session, subject: string): Promise<void> {
   await db.delete(signInAttempts).where(eq(signInAttempts.subject, subject))

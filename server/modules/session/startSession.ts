@@ -1,7 +1,10 @@
 import type { Request } from 'express'
 
 /** A new session with a new id, so that one planted or known from before is worth nothing. */
-export async function startSession(request: Request, member: { readonly companyId: string; readonly id: string }): Promise<void> {
+export async function startSession(
+  request: Request,
+  member: { readonly companyId: string; readonly id: string },
+): Promise<void> {
   await settled((done) => request.session.regenerate(done))
   request.session.companyId = member.companyId
   request.session.memberId = member.id

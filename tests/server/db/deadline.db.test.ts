@@ -28,13 +28,20 @@ beforeAll(async () => {
   await migrateDatabase(mariadb.migrationUrl)
   database = openDatabase(mariadb.url)
   const deps = {
-    db: database.db, log: pino({ level: 'silent' }), sessionSecret: 'a secret of the tests', secure: false, clientFolder: null, bcryptCost: 4,
+    db: database.db,
+    log: pino({ level: 'silent' }),
+    sessionSecret: 'a secret of the tests',
+    secure: false,
+    clientFolder: null,
+    bcryptCost: 4,
     closing: new AbortController().signal,
   }
   await insertDemoCompanies(deps)
   app = createApp(deps)
   owner = request.agent(app)
-  expect((await owner.post('/api/session').send({ email: 'owner@larkhook.example', passphrase: demoPassphrase })).status).toBe(200)
+  expect(
+    (await owner.post('/api/session').send({ email: 'owner@larkhook.example', passphrase: demoPassphrase })).status,
+  ).toBe(200)
 })
 afterAll(async () => {
   await database.close()
@@ -67,7 +74,10 @@ describe('a database that is frozen', () => {
     expect(mostMs).toBeLessThanOrEqual(5000)
     mariadb.process.kill('SIGSTOP')
     // More than the pool has connections: those who wait for one get their answer as well.
-    const all = await Promise.all([...Array.from({ length: 15 }, () => timed(read())), ...Array.from({ length: 15 }, () => timed(write()))])
+    const all = await Promise.all([
+      ...Array.from({ length: 15 }, () => timed(read())),
+      ...Array.from({ length: 15 }, () => timed(write())),
+    ])
     for (const { answer, ms } of all) {
       expectProblem(answer, 503)
       expect(Number(answer.headers['retry-after'])).toBeGreaterThan(0)

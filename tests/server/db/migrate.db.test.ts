@@ -38,7 +38,10 @@ async function shapeOf({ migrationUrl }: TestSchema) {
   const shapes: Record<string, unknown> = {}
   for (const row of tables) {
     const name = String(Object.values(row)[0])
-    shapes[name] = String((await ask(migrationUrl, `SHOW CREATE TABLE \`${name}\``))[0]!['Create Table']).replace(/ AUTO_INCREMENT=\d+/, '')
+    shapes[name] = String((await ask(migrationUrl, `SHOW CREATE TABLE \`${name}\``))[0]!['Create Table']).replace(
+      / AUTO_INCREMENT=\d+/,
+      '',
+    )
   }
   return { shapes, done: await ask(migrationUrl, 'SELECT * FROM schema_steps ORDER BY migration, position') }
 }
@@ -71,25 +74,48 @@ describe('the migrations', () => {
 
   it('stop at a statement that fails, say which, and go on from there when it is mended', async () => {
     const schema = await freshSchema()
-    const step = (position: number, statement: string): Step => ({ migration: '0000_probe', position, statement, digest: `${position}`.repeat(64) })
+    const step = (position: number, statement: string): Step => ({
+      migration: '0000_probe',
+      position,
+      statement,
+      digest: `${position}`.repeat(64),
+    })
     const first = step(0, 'CREATE TABLE probe (id int PRIMARY KEY)')
     const bad = [first, step(1, 'ALTER TABLE nowhere ADD x int'), step(2, 'ALTER TABLE probe ADD y int')]
-    await expect(migrateDatabase(schema.migrationUrl, bad)).rejects.toThrow('The migration 0000_probe stopped at its statement 2')
+    await expect(migrateDatabase(schema.migrationUrl, bad)).rejects.toThrow(
+      'The migration 0000_probe stopped at its statement 2',
+    )
     const mended = [first, step(1, 'ALTER TABLE probe ADD x int'), step(2, 'ALTER TABLE probe ADD y int')]
     await migrateDatabase(schema.migrationUrl, mended)
-    expect((await ask(schema.migrationUrl, 'SHOW COLUMNS FROM probe')).map((row) => row['Field'])).toEqual(['id', 'x', 'y'])
+    expect((await ask(schema.migrationUrl, 'SHOW COLUMNS FROM probe')).map((row) => row['Field'])).toEqual([
+      'id',
+      'x',
+      'y',
+    ])
   })
 
   it('never take what stands for their own work in mid-run', async () => {
     const schema = await freshSchema()
     await ask(schema.migrationUrl, 'CREATE TABLE second (other int)')
-    const step = (position: number, table: string): Step => ({ migration: '0000_probe', position, statement: `CREATE TABLE ${table} (id int)`, digest: `${position}`.repeat(64) })
-    await expect(migrateDatabase(schema.migrationUrl, [step(0, 'first'), step(1, 'second')])).rejects.toThrow('stopped at its statement 2')
+    const step = (position: number, table: string): Step => ({
+      migration: '0000_probe',
+      position,
+      statement: `CREATE TABLE ${table} (id int)`,
+      digest: `${position}`.repeat(64),
+    })
+    await expect(migrateDatabase(schema.migrationUrl, [step(0, 'first'), step(1, 'second')])).rejects.toThrow(
+      'stopped at its statement 2',
+    )
   })
 
   it('do not touch a database of a newer version', async () => {
     const schema = await freshSchema()
-    const newer: Step = { migration: '9999_later', position: 0, statement: 'CREATE TABLE later (id int)', digest: 'f'.repeat(64) }
+    const newer: Step = {
+      migration: '9999_later',
+      position: 0,
+      statement: 'CREATE TABLE later (id int)',
+      digest: 'f'.repeat(64),
+    }
     await migrateDatabase(schema.migrationUrl, [...steps, newer])
     await expect(migrateDatabase(schema.migrationUrl)).rejects.toThrow('newer version of Mudring')
   })
@@ -102,10 +128,25 @@ describe('the migrations', () => {
   it('are read in the order of their journal', () => {
     const folder = mkdtempSync(join(tmpdir(), 'mudring-migrations-'))
     mkdirSync(join(folder, 'meta'))
-    writeFileSync(join(folder, 'meta/_journal.json'), JSON.stringify({ entries: [{ idx: 1, tag: '0001_b' }, { idx: 0, tag: '0000_a' }] }))
-    writeFileSync(join(folder, '0000_a.sql'), 'CREATE A;\n--> statement-breakpoint\nCREATE B;\n--> statement-breakpoint\n')
+    writeFileSync(
+      join(folder, 'meta/_journal.json'),
+      JSON.stringify({
+        entries: [
+          { idx: 1, tag: '0001_b' },
+          { idx: 0, tag: '0000_a' },
+        ],
+      }),
+    )
+    writeFileSync(
+      join(folder, '0000_a.sql'),
+      'CREATE A;\n--> statement-breakpoint\nCREATE B;\n--> statement-breakpoint\n',
+    )
     writeFileSync(join(folder, '0001_b.sql'), 'CREATE C;')
-    expect(readSteps(folder).map((step) => [step.migration, step.position, step.statement])).toEqual([['0000_a', 0, 'CREATE A;'], ['0000_a', 1, 'CREATE B;'], ['0001_b', 0, 'CREATE C;']])
+    expect(readSteps(folder).map((step) => [step.migration, step.position, step.statement])).toEqual([
+      ['0000_a', 0, 'CREATE A;'],
+      ['0000_a', 1, 'CREATE B;'],
+      ['0001_b', 0, 'CREATE C;'],
+    ])
     rmSync(folder, { recursive: true })
   })
 })
@@ -113,7 +154,15 @@ describe('the migrations', () => {
 describe('the application’s user', () => {
   it('reads and writes rows, and nothing else', async () => {
     await expect(ask(clean.url, 'SELECT * FROM companies')).resolves.toEqual([])
-    for (const statement of ['CREATE TABLE mine (id int)', 'DROP TABLE job_log', 'ALTER TABLE members ADD x int', 'SELECT * FROM mysql.global_priv', 'GRANT ALL ON *.* TO CURRENT_USER', "SELECT 1 INTO OUTFILE '/tmp/mudring-x'", 'SHUTDOWN'])
+    for (const statement of [
+      'CREATE TABLE mine (id int)',
+      'DROP TABLE job_log',
+      'ALTER TABLE members ADD x int',
+      'SELECT * FROM mysql.global_priv',
+      'GRANT ALL ON *.* TO CURRENT_USER',
+      "SELECT 1 INTO OUTFILE '/tmp/mudring-x'",
+      'SHUTDOWN',
+    ])
       await expect(ask(clean.url, statement), statement).rejects.toThrow(/denied/)
   })
 })

@@ -19,7 +19,16 @@ afterAll(() => test.close())
 
 const signInPath = '/api/session'
 const probe = (handle: () => Promise<unknown>, over: Partial<Pick<Route, 'response'>> = {}) =>
-  defineRoute({ method: 'get', path: '/api/probe', action: 'job.read', params: noInput, query: noInput, body: noInput, handle, ...over })
+  defineRoute({
+    method: 'get',
+    path: '/api/probe',
+    action: 'job.read',
+    params: noInput,
+    query: noInput,
+    body: noInput,
+    handle,
+    ...over,
+  })
 
 /** What the owner gets from a route of this test's own. */
 async function answerOf(route: Route) {
@@ -33,14 +42,22 @@ describe('what is not well formed', () => {
     expect(expectProblem(response, 400).detail).toContain('not JSON')
   })
   it('a body of 5 MB, with the limit', async () => {
-    const response = await request(test.app).post(signInPath).send({ email: 'x'.repeat(5 * 1024 * 1024), passphrase: 'y' })
+    const response = await request(test.app)
+      .post(signInPath)
+      .send({ email: 'x'.repeat(5 * 1024 * 1024), passphrase: 'y' })
     expect(expectProblem(response, 413).detail).toContain('at most 1 MB')
   })
   it('a form from another page', async () => {
-    expectProblem(await request(test.app).post(signInPath).type('form').send({ email: 'a@b.example', passphrase: 'c' }), 415)
+    expectProblem(
+      await request(test.app).post(signInPath).type('form').send({ email: 'a@b.example', passphrase: 'c' }),
+      415,
+    )
   })
   it('text that says it is JSON in another alphabet', async () => {
-    const response = await request(test.app).post(signInPath).set('Content-Type', 'application/json; charset=klingon').send('{}')
+    const response = await request(test.app)
+      .post(signInPath)
+      .set('Content-Type', 'application/json; charset=klingon')
+      .send('{}')
     expectProblem(response, 415)
   })
   it('an address that does not exist, with or without /api, by any method', async () => {
@@ -54,7 +71,11 @@ describe('what is not well formed', () => {
   })
   it('fields nobody asked for, and those that would reach into every object', async () => {
     const agent = await test.signIn('owner@larkhook.example')
-    for (const body of ['{"version":1,"companyId":"quoin-batten"}', '{"version":1,"__proto__":{"polluted":true}}', '{"version":1,"constructor":{"prototype":{}}}']) {
+    for (const body of [
+      '{"version":1,"companyId":"quoin-batten"}',
+      '{"version":1,"__proto__":{"polluted":true}}',
+      '{"version":1,"constructor":{"prototype":{}}}',
+    ]) {
       const response = await agent.patch('/api/company').set('Content-Type', 'application/json').send(body)
       expect(expectProblem(response, 400).errors, body).toHaveLength(1)
     }
@@ -82,7 +103,13 @@ describe('a request from another site', () => {
     [{}, 401],
   ])('%j is answered %i', async (headers, status) => {
     const wrong = { email: 'nobody@nowhere.example', passphrase: 'nothing at all' }
-    expectProblem(await request(test.app).post(signInPath).set(headers as Record<string, string>).send(wrong), status)
+    expectProblem(
+      await request(test.app)
+        .post(signInPath)
+        .set(headers as Record<string, string>)
+        .send(wrong),
+      status,
+    )
   })
   it('changes nothing, and does not sign out', async () => {
     const agent = await test.signIn('lead@larkhook.example')
@@ -90,7 +117,8 @@ describe('a request from another site', () => {
     expect((await agent.get(signInPath)).status).toBe(200)
   })
   it('is known by the host that was asked, port and all', async () => {
-    const post = (origin: string) => request(test.app).post(signInPath).set('Host', 'mudring.example:8443').set('Origin', origin).send({})
+    const post = (origin: string) =>
+      request(test.app).post(signInPath).set('Host', 'mudring.example:8443').set('Origin', origin).send({})
     expectProblem(await post('https://mudring.example:8443'), 400)
     expectProblem(await post('https://mudring.example'), 403)
   })
@@ -110,7 +138,9 @@ describe('headers', () => {
   })
   it('ask for HTTPS behind HTTPS', async () => {
     const app = createApp({ ...test.deps, secure: true })
-    expect((await request(app).get(signInPath)).headers['strict-transport-security']).toBe('max-age=31536000; includeSubDomains')
+    expect((await request(app).get(signInPath)).headers['strict-transport-security']).toBe(
+      'max-age=31536000; includeSubDomains',
+    )
   })
 })
 
@@ -145,7 +175,9 @@ describe('the route table', () => {
 
 describe('an answer', () => {
   it('leaves out what its schema does not name', async () => {
-    const route = probe(async () => ({ name: 'Patio', passphraseHash: 'secret' }), { response: z.object({ name: z.string() }) })
+    const route = probe(async () => ({ name: 'Patio', passphraseHash: 'secret' }), {
+      response: z.object({ name: z.string() }),
+    })
     const response = await answerOf(route)
     expect([response.status, response.body]).toEqual([200, { name: 'Patio' }])
   })

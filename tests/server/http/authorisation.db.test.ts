@@ -29,7 +29,13 @@ beforeAll(async () => {
   routes = buildRoutes(deps)
   app = createApp(deps, routes)
   const first = await signInAt(app, 'owner@larkhook.example')
-  const maker = { id: 'maker', name: 'Merle Oak', email: 'maker@larkhook.example', role: 'owner', passphrase: demoPassphrase }
+  const maker = {
+    id: 'maker',
+    name: 'Merle Oak',
+    email: 'maker@larkhook.example',
+    role: 'owner',
+    passphrase: demoPassphrase,
+  }
   await first.post('/api/members').send(maker)
   // Whoever makes things is none of those who try things: trying ends sessions.
   const owner = await signInAt(app, maker.email)
@@ -43,7 +49,11 @@ afterAll(async () => {
 const table = () => routes.map((route) => [`${route.method} ${route.path}`, route] as const)
 const guarded = () => table().filter(([, route]) => route.action !== 'public')
 
-function send(agent: Agent | ReturnType<typeof request>, route: Route, { path, body, endless }: Probe): Promise<Response> {
+function send(
+  agent: Agent | ReturnType<typeof request>,
+  route: Route,
+  { path, body, endless }: Probe,
+): Promise<Response> {
   const sent = agent[route.method](path)
   if (body) void sent.send(body)
   if (!endless) return Promise.resolve(sent)
@@ -56,7 +66,8 @@ function send(agent: Agent | ReturnType<typeof request>, route: Route, { path, b
         response.setEncoding('utf8')
         response.on('data', (part: string) => {
           text += part
-          if (response.headers['content-type']?.includes('event-stream')) (response as unknown as IncomingMessage).destroy()
+          if (response.headers['content-type']?.includes('event-stream'))
+            (response as unknown as IncomingMessage).destroy()
         })
         response.on('close', () => parsed(null, text.startsWith('{') ? JSON.parse(text) : text))
       })
@@ -66,7 +77,11 @@ function send(agent: Agent | ReturnType<typeof request>, route: Route, { path, b
 
 describe('every route', () => {
   it('has a request here that is right in every respect, and nothing else has', () => {
-    expect(Object.keys(routeProbes).sort()).toEqual(table().map(([name]) => name).sort())
+    expect(Object.keys(routeProbes).sort()).toEqual(
+      table()
+        .map(([name]) => name)
+        .sort(),
+    )
   })
 
   it('answers nobody with 401, unless it is for anybody', async () => {
@@ -84,13 +99,18 @@ describe('every route', () => {
     for (const [name, route] of guarded()) {
       const probe = await routeProbes[name]!(world)
       const response = await send(agent, route, probe)
-      if (can(role, route.action as Action)) expect(response.status, `${role} ${name}: ${response.text}`).toBe(probe.status)
+      if (can(role, route.action as Action))
+        expect(response.status, `${role} ${name}: ${response.text}`).toBe(probe.status)
       else {
         refused.push(name)
         expect(expectProblem(response, 403).details).toEqual({ action: route.action })
       }
     }
-    expect(refused).toEqual(guarded().filter(([, route]) => !can(role, route.action as Action)).map(([name]) => name))
+    expect(refused).toEqual(
+      guarded()
+        .filter(([, route]) => !can(role, route.action as Action))
+        .map(([name]) => name),
+    )
   })
 
   it('answers a member of another company as if there were nothing, whatever their role', async () => {
@@ -106,7 +126,8 @@ describe('every route', () => {
         if (probe.absent === undefined) continue
         const nothing = await send(stranger, route, forNothing(probe, world))
         expect([theirs.status, nothing.status], `${email} ${name}`).toEqual([probe.absent, probe.absent])
-        if (probe.absent >= 400) expect(withoutId(expectProblem(theirs, 404)), name).toEqual(withoutId(expectProblem(nothing, 404)))
+        if (probe.absent >= 400)
+          expect(withoutId(expectProblem(theirs, 404)), name).toEqual(withoutId(expectProblem(nothing, 404)))
       }
     }
   })
@@ -122,7 +143,8 @@ describe('every route', () => {
 
   it('names the company in every statement on a company’s table', async () => {
     const [rows] = (await database.db.execute(
-      sql`select distinct table_name as name from information_schema.columns where table_schema = database() and column_name = 'company_id'`,
+      sql`select distinct table_name as name from information_schema.columns
+        where table_schema = database() and column_name = 'company_id'`,
     )) as unknown as [{ name: string }[]]
     // A session is found by the hash of its id, before it is known whose it is.
     const companyTables = new Set(rows.map((row) => row.name).filter((name) => name !== 'sessions'))
@@ -141,6 +163,11 @@ describe('the check on statements', () => {
       'delete from `members` where `members`.`id` = ?',
       'insert into `jobs` (`id`) values (?)',
     ]
-    expect(unscoped([...forgetful, 'select `id` from `jobs` where `jobs`.`company_id` = ?', 'select 1 from `sessions`'], tables)).toEqual(forgetful)
+    expect(
+      unscoped(
+        [...forgetful, 'select `id` from `jobs` where `jobs`.`company_id` = ?', 'select 1 from `sessions`'],
+        tables,
+      ),
+    ).toEqual(forgetful)
   })
 })

@@ -27,11 +27,18 @@ describe('the built client', () => {
     expect([response.status, response.headers['cache-control']]).toEqual([200, 'public, max-age=31536000, immutable'])
     expect(response.headers['content-type']).toContain('javascript')
   })
-  it.each(['/', '/jobs', '/jobs/heron-point/riser', '/jobs/a.b/riser', '/index.html'])('has its page at %s, asked for anew each time', async (path) => {
-    const response = await request(test.app).get(path)
-    expect([response.status, response.text, response.headers['cache-control']]).toEqual([200, '<title>Mudring</title>', 'no-cache'])
-    expect(response.headers['content-security-policy']).toContain("script-src 'self'")
-  })
+  it.each(['/', '/jobs', '/jobs/heron-point/riser', '/jobs/a.b/riser', '/index.html'])(
+    'has its page at %s, asked for anew each time',
+    async (path) => {
+      const response = await request(test.app).get(path)
+      expect([response.status, response.text, response.headers['cache-control']]).toEqual([
+        200,
+        '<title>Mudring</title>',
+        'no-cache',
+      ])
+      expect(response.headers['content-security-policy']).toContain("script-src 'self'")
+    },
+  )
   it('has its other files asked for anew each time', async () => {
     expect((await request(test.app).get('/sw.js')).headers['cache-control']).toBe('no-cache')
   })

@@ -11,14 +11,30 @@ import { startTestApp, type TestApp } from '../../support/testApp.ts'
 
 let test: TestApp
 const lines: string[] = []
-const log = createLogger('info', new Writable({ write: (chunk, _encoding, done) => (lines.push(String(chunk)), done()) }))
+const log = createLogger(
+  'info',
+  new Writable({ write: (chunk, _encoding, done) => (lines.push(String(chunk)), done()) }),
+)
 
-const twice = { id: 'twin', companyId: 'larkhook', name: 'Twin\n{"level":60}', email: 'canary@larkhook.example', role: 'lead', passphraseHash: '$2b$canary-hash', createdAt: '2026-01-01 00:00:00.000' } as const
+const twice = {
+  id: 'twin',
+  companyId: 'larkhook',
+  name: 'Twin\n{"level":60}',
+  email: 'canary@larkhook.example',
+  role: 'lead',
+  passphraseHash: '$2b$canary-hash',
+  createdAt: '2026-01-01 00:00:00.000',
+} as const
 beforeAll(async () => {
   test = await startTestApp({ log })
   // A statement that fails with values in it: the same member twice.
   const broken = defineRoute({
-    method: 'get', path: '/api/broken', action: 'job.read', params: noInput, query: noInput, body: noInput,
+    method: 'get',
+    path: '/api/broken',
+    action: 'job.read',
+    params: noInput,
+    query: noInput,
+    body: noInput,
     handle: async ({ db }) => {
       await insertMember(db, twice)
       await insertMember(db, twice)
@@ -39,11 +55,21 @@ describe('the log', () => {
     expect(events.filter((event) => event.msg === 'a sign-in did not fit')).toHaveLength(1)
     const faults = events.filter((event) => event.msg === 'unexpected error')
     expect(faults).toHaveLength(1)
-    expect(faults[0]).toMatchObject({ level: 50, requestId: expect.stringMatching(/^[0-9a-f-]{36}$/), method: 'GET', path: '/api/broken' })
+    expect(faults[0]).toMatchObject({
+      level: 50,
+      requestId: expect.stringMatching(/^[0-9a-f-]{36}$/),
+      method: 'GET',
+      path: '/api/broken',
+    })
   })
   it('tells of a fault its statement, its number and where it happened', () => {
-    const fault = JSON.parse(lines.find((line) => line.includes('unexpected error'))!) as { err: Record<string, unknown> }
-    expect(fault.err).toMatchObject({ query: expect.stringContaining('insert into `members`'), cause: { errno: 1062, code: 'ER_DUP_ENTRY' } })
+    const fault = JSON.parse(lines.find((line) => line.includes('unexpected error'))!) as {
+      err: Record<string, unknown>
+    }
+    expect(fault.err).toMatchObject({
+      query: expect.stringContaining('insert into `members`'),
+      cause: { errno: 1062, code: 'ER_DUP_ENTRY' },
+    })
     expect(fault.err['stack']).toContain('insertMember')
   })
   it('never holds what people typed, a hash or a cookie', () => {

@@ -36,14 +36,26 @@ const stop = async (server: StartedServer, signal: NodeJS.Signals = 'SIGTERM') =
   return server.ended
 }
 
-async function signIn({ address }: StartedServer): Promise<(method: string, path: string, body?: object) => Promise<Response>> {
+async function signIn({
+  address,
+}: StartedServer): Promise<(method: string, path: string, body?: object) => Promise<Response>> {
   const json = { 'Content-Type': 'application/json' }
-  const signedIn = await fetch(`${address}/api/session`, { method: 'POST', headers: json, body: JSON.stringify({ email: 'owner@larkhook.example', passphrase: demoPassphrase }) })
+  const signedIn = await fetch(`${address}/api/session`, {
+    method: 'POST',
+    headers: json,
+    body: JSON.stringify({ email: 'owner@larkhook.example', passphrase: demoPassphrase }),
+  })
   expect(signedIn.status).toBe(200)
   const cookie = signedIn.headers.getSetCookie()[0]!.split(';')[0]!
-  return (method, path, body) => fetch(`${address}${path}`, { method, headers: { ...json, cookie }, ...(body ? { body: JSON.stringify(body) } : {}) })
+  return (method, path, body) =>
+    fetch(`${address}${path}`, {
+      method,
+      headers: { ...json, cookie },
+      ...(body ? { body: JSON.stringify(body) } : {}),
+    })
 }
-const nameOf = async (server: StartedServer) => ((await (await (await signIn(server))('GET', '/api/company')).json()) as { name: string; version: number }).name
+const nameOf = async (server: StartedServer) =>
+  ((await (await (await signIn(server))('GET', '/api/company')).json()) as { name: string; version: number }).name
 async function rename(server: StartedServer, name: string) {
   const send = await signIn(server)
   const { version } = (await (await send('GET', '/api/company')).json()) as { version: number }
@@ -60,20 +72,46 @@ beforeAll(async () => {
 describe('a first start', () => {
   it('prepares a private folder, a database that keeps what it acknowledges, and the demo jobs', async () => {
     expect(statSync(home).mode & 0o777).toBe(0o700)
-    for (const file of ['database.json', 'session-secret']) expect(statSync(join(home, file)).mode & 0o777, file).toBe(0o600)
+    for (const file of ['database.json', 'session-secret'])
+      expect(statSync(join(home, file)).mode & 0o777, file).toBe(0o600)
     const { jobs } = (await (await (await signIn(server))('GET', '/api/jobs')).json()) as { jobs: unknown[] }
     expect(jobs.length).toBeGreaterThan(0)
-    const { port, password } = JSON.parse(readFileSync(join(home, 'database.json'), 'utf8')) as { port: number; password: string }
-    const connection = await mysql.createConnection({ host: '127.0.0.1', port, user: 'mudring', password, database: 'mudring' })
+    const { port, password } = JSON.parse(readFileSync(join(home, 'database.json'), 'utf8')) as {
+      port: number
+      password: string
+    }
+    const connection = await mysql.createConnection({
+      host: '127.0.0.1',
+      port,
+      user: 'mudring',
+      password,
+      database: 'mudring',
+    })
     const [[row]] = await connection.query<mysql.RowDataPacket[]>(
-      `SELECT @@innodb_flush_log_at_trx_commit AS flush, @@innodb_doublewrite AS doublewrite, @@innodb_snapshot_isolation AS snapshot,
-        @@innodb_rollback_on_timeout AS rollback, @@bind_address AS bind, @@character_set_server AS charset, @@global.time_zone AS zone,
+      `SELECT @@innodb_flush_log_at_trx_commit AS flush, @@innodb_doublewrite AS doublewrite,
+        @@innodb_snapshot_isolation AS snapshot, @@innodb_rollback_on_timeout AS rollback, @@bind_address AS bind,
+        @@character_set_server AS charset, @@global.time_zone AS zone,
         @@sql_mode LIKE '%STRICT_TRANS_TABLES%' AS strict`,
     )
-    expect(row).toEqual({ flush: 1, doublewrite: 1, snapshot: 1, rollback: 1, bind: '127.0.0.1', charset: 'utf8mb4', zone: '+00:00', strict: 1 })
+    expect(row).toEqual({
+      flush: 1,
+      doublewrite: 1,
+      snapshot: 1,
+      rollback: 1,
+      bind: '127.0.0.1',
+      charset: 'utf8mb4',
+      zone: '+00:00',
+      strict: 1,
+    })
     await connection.end()
-    await expect(mysql.createConnection({ host: '127.0.0.1', port, user: 'root', password: '' }), 'root over the network').rejects.toThrow()
-    await expect(mysql.createConnection({ host: '127.0.0.1', port, user: '', password: '' }), 'nobody in particular').rejects.toThrow()
+    await expect(
+      mysql.createConnection({ host: '127.0.0.1', port, user: 'root', password: '' }),
+      'root over the network',
+    ).rejects.toThrow()
+    await expect(
+      mysql.createConnection({ host: '127.0.0.1', port, user: '', password: '' }),
+      'nobody in particular',
+    ).rejects.toThrow()
   })
 })
 

@@ -18,18 +18,29 @@ const fresh = { id: 'new-tech', name: 'Wren Alder', email: 'wren@larkhook.exampl
 const add = (body: object, agent = owner) => agent.post('/api/members').send(body)
 const change = (id: string, body: object, agent = owner) => agent.patch(`/api/members/${id}`).send(body)
 const list = async (agent = owner) => ((await agent.get('/api/members')).body as { members: MemberAnswer[] }).members
-const signIn = (email: string, given = passphrase) => request(test.app).post('/api/session').send({ email, passphrase: given })
+const signIn = (email: string, given = passphrase) =>
+  request(test.app).post('/api/session').send({ email, passphrase: given })
 
 describe('members', () => {
   it('are listed without anything that signs in', async () => {
     const members = await list()
     expect(members.find((member) => member.role === 'designer')).toEqual({
-      id: 'larkhook-designer', name: 'Dana Sorrel', email: 'designer@larkhook.example', role: 'designer', disabled: false,
+      id: 'larkhook-designer',
+      name: 'Dana Sorrel',
+      email: 'designer@larkhook.example',
+      role: 'designer',
+      disabled: false,
     })
     expect(JSON.stringify(members)).not.toMatch(/hash|\$2b|quoin/i)
   })
   it('are added by the owner and can then sign in', async () => {
-    expect((await add(fresh)).body).toEqual({ id: 'new-tech', name: 'Wren Alder', email: fresh.email, role: 'technician', disabled: false })
+    expect((await add(fresh)).body).toEqual({
+      id: 'new-tech',
+      name: 'Wren Alder',
+      email: fresh.email,
+      role: 'technician',
+      disabled: false,
+    })
     expect((await signIn(fresh.email)).status).toBe(200)
   })
   it.each([
@@ -108,11 +119,20 @@ describe('a company', () => {
       ])
       // Whoever came second is an owner no more, or the only one.
       const statuses = answers.map((answer) => answer.status).sort()
-      expect([[200, 403], [200, 422]], `round ${round}`).toContainEqual(statuses)
+      expect(
+        [
+          [200, 403],
+          [200, 422],
+        ],
+        `round ${round}`,
+      ).toContainEqual(statuses)
       const left = answers[0].status === 200 ? 'larkhook-owner' : 'second'
       const removed = left === 'second' ? 'larkhook-owner' : 'second'
       const owners = (await list(agents[left])).filter((member) => member.role === 'owner' && !member.disabled)
-      expect(owners.map((member) => member.id), `round ${round}`).toEqual([left])
+      expect(
+        owners.map((member) => member.id),
+        `round ${round}`,
+      ).toEqual([left])
       expect((await change(removed, { role: 'owner' }, agents[left])).status).toBe(200)
     }
   })

@@ -58,7 +58,9 @@ describe('hashing', () => {
     expect(delay.percentile(90) / 1e6).toBeLessThan(50)
   })
   it('refuses those who would wait too long, and serves the rest', async () => {
-    const answers = await Promise.allSettled(Array.from({ length: 90 }, () => hashPassphrase('studs are open today', 6)))
+    const answers = await Promise.allSettled(
+      Array.from({ length: 90 }, () => hashPassphrase('studs are open today', 6)),
+    )
     const refused = answers.filter((answer) => answer.status === 'rejected')
     expect(refused.length).toBe(90 - 62)
     expect(refused[0]!.reason).toMatchObject({ code: 'unavailable', details: { retryAfterSeconds: 3 } })

@@ -46,7 +46,10 @@ describe('signing in', () => {
   it('keeps the cookie from scripts and other sites, and behind HTTPS from everything else', async () => {
     const plain = cookieOf(await post(designer))
     expect(plain).toMatch(/^mudring=s%3A.+; Path=\/; Expires=.+; HttpOnly; SameSite=Lax$/)
-    const secure = await request(createApp({ ...test.deps, secure: true })).post(path).set('X-Forwarded-Proto', 'https').send(designer)
+    const secure = await request(createApp({ ...test.deps, secure: true }))
+      .post(path)
+      .set('X-Forwarded-Proto', 'https')
+      .send(designer)
     expect(cookieOf(secure)).toMatch(/^__Host-mudring=.+; Path=\/; Expires=.+; HttpOnly; Secure; SameSite=Lax$/)
     expect(cookieOf(secure)).not.toContain('Domain')
   })
@@ -102,25 +105,35 @@ describe('guessing', () => {
     expect(statuses(burst).filter((status) => status === 429)).toHaveLength(40 - mostAttempts.pair)
   })
   it('from one address at many people stops too', async () => {
-    const guesses = await Promise.all(Array.from({ length: mostAttempts.address + 5 }, (_, i) => post({ ...wrong, email: `somebody${i}@larkhook.example` })))
+    const guesses = await Promise.all(
+      Array.from({ length: mostAttempts.address + 5 }, (_, i) =>
+        post({ ...wrong, email: `somebody${i}@larkhook.example` }),
+      ),
+    )
     expect(statuses(guesses).filter((status) => status === 429)).toHaveLength(5)
   })
   it('from one address does not keep the member out everywhere else', async () => {
     const app = createApp({ ...test.deps, secure: true })
-    const from = (address: string, body: object) => request(app).post(path).set({ 'X-Forwarded-Proto': 'https', 'X-Forwarded-For': address }).send(body)
+    const from = (address: string, body: object) =>
+      request(app).post(path).set({ 'X-Forwarded-Proto': 'https', 'X-Forwarded-For': address }).send(body)
     for (let i = 0; i <= mostAttempts.pair; i++) await from('192.0.2.1', wrong)
     expectProblem(await from('192.0.2.1', designer), 429)
     expect((await from('192.0.2.2', designer)).status).toBe(200)
   })
   it('from everywhere at one member stops at last', async () => {
     const app = createApp({ ...test.deps, secure: true })
-    const from = (i: number) => request(app).post(path).set({ 'X-Forwarded-Proto': 'https', 'X-Forwarded-For': `192.0.2.${i}` }).send(wrong)
+    const from = (i: number) =>
+      request(app)
+        .post(path)
+        .set({ 'X-Forwarded-Proto': 'https', 'X-Forwarded-For': `192.0.2.${i}` })
+        .send(wrong)
     const all: Response[] = []
     for (let i = 0; i < mostAttempts.email + 4; i++) all.push(await from(i))
     expect(statuses(all).filter((status) => status === 429)).toHaveLength(4)
   })
   it('is not moved to another address by a header where there is no proxy', async () => {
-    for (let i = 0; i < mostAttempts.pair; i++) await request(test.app).post(path).set('X-Forwarded-For', `198.51.100.${i}`).send(wrong)
+    for (let i = 0; i < mostAttempts.pair; i++)
+      await request(test.app).post(path).set('X-Forwarded-For', `198.51.100.${i}`).send(wrong)
     expectProblem(await request(test.app).post(path).set('X-Forwarded-For', '198.51.100.99').send(wrong), 429)
   })
   it('is forgotten when the right one comes, or the window ends', async () => {
@@ -151,11 +164,17 @@ describe('a session', () => {
   it('ends by itself when it was idle for twelve hours, and lasts while it is used', async () => {
     const agent = await test.signIn('lead@larkhook.example')
     const lead = eq(sessions.memberId, 'larkhook-lead')
-    await test.database.db.update(sessions).set({ idleUntil: Date.now() + 5000 }).where(lead)
+    await test.database.db
+      .update(sessions)
+      .set({ idleUntil: Date.now() + 5000 })
+      .where(lead)
     expect((await agent.get(path)).status).toBe(200)
     const rows = await test.database.db.select().from(sessions).where(lead)
     expect(Math.max(...rows.map((row) => row.idleUntil))).toBeGreaterThan(Date.now() + idleMs - 60_000)
-    await test.database.db.update(sessions).set({ idleUntil: Date.now() - 1 }).where(lead)
+    await test.database.db
+      .update(sessions)
+      .set({ idleUntil: Date.now() - 1 })
+      .where(lead)
     expectProblem(await agent.get(path), 401)
   })
   it('ends after thirty days however much it was used', async () => {
@@ -164,14 +183,21 @@ describe('a session', () => {
     expectProblem(await agent.get(path), 401)
   })
   it('is kept as a hash, never by its id', async () => {
-    const id = decodeURIComponent(cookieOf(await post(designer))).split('s:')[1]!.split('.')[0]!
+    const id = decodeURIComponent(cookieOf(await post(designer)))
+      .split('s:')[1]!
+      .split('.')[0]!
     const rows = await test.database.db.select().from(sessions)
     expect(rows.length).toBeGreaterThan(0)
     expect(JSON.stringify(rows)).not.toContain(id)
   })
   it('of another secret is none', async () => {
     const pair = pairOf(await post(designer))
-    expectProblem(await request(createApp({ ...test.deps, sessionSecret: 'another secret' })).get(path).set('Cookie', pair), 401)
+    expectProblem(
+      await request(createApp({ ...test.deps, sessionSecret: 'another secret' }))
+        .get(path)
+        .set('Cookie', pair),
+      401,
+    )
   })
 })
 
@@ -189,7 +215,8 @@ describe('one’s own passphrase', () => {
   it('is not changed with a wrong one, and guessing it counts like signing in', async () => {
     const agent = await test.signIn('technician@larkhook.example')
     const guess = () => agent.put(`${path}/passphrase`).send({ current: 'not this one at all', passphrase: fresh })
-    for (let i = 0; i < mostAttempts.pair; i++) expect(expectProblem(await guess(), 422).detail).toContain('Nothing was changed')
+    for (let i = 0; i < mostAttempts.pair; i++)
+      expect(expectProblem(await guess(), 422).detail).toContain('Nothing was changed')
     expectProblem(await guess(), 429)
     expect((await agent.get(path)).status).toBe(200)
   })
