@@ -60,25 +60,29 @@ export function* differences(before: JobDocument | undefined, after: JobDocument
   }
 }
 
-/** What answers one question, and who asked it. */
+const nothing: readonly JobRecord[] = []
+
+/** What answers one question, and who asked it. Most answers are one record or none, so a map is made for the second only. */
 class Answer extends Source {
-  readonly records = new Map<string, JobRecord>()
+  private only: JobRecord | undefined
+  private many: Map<string, JobRecord> | undefined
   private inOrder: readonly JobRecord[] | undefined
 
+  /** Takes a record in, in the place it has already or at the end. */
   put(record: JobRecord): void {
-    this.records.set(record.id, record)
     this.inOrder = undefined
+    if (!this.many && (this.only === undefined || this.only.id === record.id)) this.only = record
+    else (this.many ??= new Map(this.only && [[this.only.id, this.only]])).set(record.id, record)
   }
   remove(id: string): void {
-    this.records.delete(id)
     this.inOrder = undefined
+    if (this.many) this.many.delete(id)
+    else if (this.only?.id === id) this.only = undefined
   }
   get list(): readonly JobRecord[] {
-    return (this.inOrder ??= settled([...this.records.values()]))
+    return (this.inOrder ??= this.many ? settled([...this.many.values()]) : this.only ? [this.only] : nothing)
   }
 }
-
-const nothing: readonly JobRecord[] = []
 
 /** Records by their place and by the questions they answer, kept up to date edit by edit, each with who read it. */
 export class JobIndex {
@@ -135,9 +139,9 @@ export class JobIndex {
   ask<R extends JobRecord>(key: string, note: (source: Source) => void): readonly R[] {
     const answer = this.answer(key)
     note(answer)
-    return (answer.records.size ? answer.list : nothing) as readonly R[]
+    return answer.list as readonly R[]
   }
 }
 
-const settled = (records: JobRecord[]): readonly JobRecord[] => (records.length === 1 || fieldKinds.has(records[0]!.kind) ? records : records.sort(settledOrder))
+const settled = (records: JobRecord[]): readonly JobRecord[] => (records.length < 2 || fieldKinds.has(records[0]!.kind) ? records : records.sort(settledOrder))
 const settledOrder = (a: JobRecord, b: JobRecord): number => (a.kind === 'run' && b.kind === 'run' ? a.serial - b.serial : 0) || (a.id < b.id ? -1 : 1)
