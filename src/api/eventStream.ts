@@ -3,8 +3,11 @@ interface Listening {
   readonly close: () => void
 }
 
-/** Follows a server's events and comes back by itself; every message is a JSON object with a version. */
-export function followVersions(path: string, onVersion: (version: number) => void): Listening {
+/**
+ * Follows a server's events and comes back by itself; every message is a JSON object with a version. `onBroken` is told
+ * each time the stream ends: the reason, a session that is over say, shows only to whoever asks otherwise.
+ */
+export function followVersions(path: string, onVersion: (version: number) => void, onBroken?: () => void): Listening {
   let source: EventSource | undefined
   let timer: ReturnType<typeof setTimeout> | undefined
   let waitMs = 1000
@@ -20,6 +23,7 @@ export function followVersions(path: string, onVersion: (version: number) => voi
     source.onerror = () => {
       source?.close()
       if (closed) return
+      onBroken?.()
       timer = setTimeout(open, waitMs)
       waitMs = Math.min(waitMs * 2, 30_000)
     }

@@ -1,26 +1,18 @@
 import { defineStore } from 'pinia'
 import { computed, ref, shallowRef, watch } from 'vue'
-import type { JobMember, LogEntry } from '../../../shared/api/jobs.ts'
-import { maxCommandsPerPush } from '../../../shared/api/jobs.ts'
+import type { JobMember, JobOpened, LogEntry, RefusedCommand } from '../../../shared/api/jobs.ts'
 import { describe, type Actor, type Command, type Intent } from '../../../shared/commands/index.ts'
 import { deriveJob, type Derived } from '../../../shared/derive/deriveJob.ts'
 import { buildDocument, jobOf, type JobDocument } from '../../../shared/model/jobDocument.ts'
 import { apply, isEmpty, type Change } from '../../../shared/sync/change.ts'
-import type { ConflictDetails } from '../../../shared/sync/conflict.ts'
 import { replay } from '../../../shared/sync/replay.ts'
-import { ApiProblem, NoConnection, sentenceOf } from '../../api/request.ts'
-import type { OutboxDisk } from '../../api/outboxDisk.ts'
+import type { Kept, OutboxDisk } from '../../api/outboxDisk.ts'
+import { sentenceOf } from '../../api/request.ts'
 import type { JobApi } from './jobApi.ts'
-import { useJobHistory } from './jobHistory.ts'
-
-/** A command that the server would not take: kept with its words until somebody has seen it. */
-export interface Refused {
-  readonly command: Command
-  readonly words: string
-  readonly message: string
-  /** Both values, where somebody else had written the same field. */
-  readonly conflict: ConflictDetails | null
-}
+import { sendBehind } from './sendBehind.ts'
+import { startJobSync, type JobSync, type SyncTrouble } from './startJobSync.ts'
+import { useJobHistory } from './useJobHistory.ts'
+import { useJobOutbox } from './useJobOutbox.ts'
 
 export interface OpenWith {
   readonly jobId: string
@@ -31,216 +23,203 @@ export interface OpenWith {
   readonly now?: () => string
 }
 
-const firstWaitMs = 500
-const longestWaitMs = 15_000
-
 /**
- * The open job. Everything on the screen is `doc` and `derived`; every edit goes through `edit`, shows at once, waits in
- * the outbox until the server has it, and is there again after a reload.
+ * The open job. What a section needs: `doc` and `derived` to show, `edit(intent)` to change anything, `undo`, `redo`,
+ * `undoWords` and `redoWords`, `notice` with the sentence of what was refused here, `status` while it is opened.
+ * Every edit shows at once, waits in the outbox until the server has it, and is there again after a reload.
  */
 export const useJobStore = defineStore('job', () => {
   const status = ref<'closed' | 'loading' | 'ready' | 'failed'>('closed')
   const fault = ref('')
+  /** As the server has it, and as it is with what still waits. */
   const confirmed = shallowRef<JobDocument>(buildDocument('', 0, []))
-  const shown = shallowRef<JobDocument>(confirmed.value)
-  const outbox = shallowRef<readonly Command[]>([])
+  const doc = shallowRef<JobDocument>(confirmed.value)
+  const derived = shallowRef<Derived>()
+  const job = computed(() => jobOf(doc.value))
   const members = shallowRef<readonly JobMember[]>([])
   const notice = ref('')
-  const refused = shallowRef<readonly Refused[]>([])
-  const isOffline = ref(false)
+  const trouble = ref<SyncTrouble>('none')
+  const troubleText = ref('')
+  const isOffline = computed(() => trouble.value === 'no answer')
+  const outbox = useJobOutbox()
   const history = useJobHistory()
+  /** What this session's own commands did, for undo. */
   const changes = new Map<string, Change>()
-  /** What each command was called when it was made: its words need the job as it then was. */
-  const wordsOf = new Map<string, string>()
   let context: OpenWith | undefined
-  let syncing: Promise<void> | undefined
-  let retry: ReturnType<typeof setTimeout> | undefined
-  let waitMs = firstWaitMs
-  let known = 0
+  let link: JobSync | undefined
+  let lastHeard = 0
 
-  const now = () => context?.now?.() ?? new Date().toISOString()
-  const changeOf = (id: string) => changes.get(id)
-  const derived = shallowRef<Derived>()
-  watch(shown, (doc) => status.value === 'ready' && (derived.value = deriveJob(doc, derived.value?.doc.id === doc.id ? derived.value : undefined)), { flush: 'sync' })
-  const job = computed(() => jobOf(shown.value))
+  watch(doc, (now) => status.value === 'ready' && (derived.value = deriveJob(now, derived.value?.doc.id === now.id ? derived.value : undefined)), { flush: 'sync' })
 
   return {
-    status, fault, doc: shown, derived, job, members, outbox, refused, notice, isOffline, confirmed,
-    undoWords: history.undoWords, redoWords: history.redoWords,
-    open, close, edit, undo, redo, sync, heard, dismiss, insist, memberName, newId,
+    status, fault, doc, derived, job, members, outbox: outbox.commands, refused: outbox.refused, isSafe: outbox.isSafe, unreadable: outbox.unreadable,
+    notice, trouble, troubleText, isOffline, confirmed, undoWords: history.undoWords, redoWords: history.redoWords,
+    open, close, edit, undo, redo, sync, ask, heard, dismiss, insist, memberName, newId,
   }
 
   /** Opens a job, with what is still waiting from before. */
-  async function open(given: OpenWith) {
+  async function open(given: OpenWith): Promise<void> {
     close()
     context = given
     status.value = 'loading'
     fault.value = ''
+    lastHeard = 0
+    const loaded = outbox.begin(given.disk, onLeftBehind)
     try {
       const opened = await given.api.open()
+      await loaded
       if (context !== given) return
-      members.value = opened.members
-      confirmed.value = buildDocument(given.jobId, opened.version, opened.records)
-      known = opened.version
-      outbox.value = (await given.disk?.load()) ?? []
+      remember(outbox.waiting.value)
+      confirm(opened)
       status.value = 'ready'
       rebase()
-      void sync()
+      link = startJobSync({
+        api: given.api,
+        version: () => confirmed.value.version,
+        waiting: () => outbox.commands.value,
+        take, settle, onTrouble,
+        afresh: (again) => {
+          confirm(again)
+          rebase()
+        },
+      })
+      link.heard(lastHeard)
+      void link.sync()
     } catch (error) {
       if (context !== given) return
       status.value = 'failed'
       fault.value = sentenceOf(error)
     }
   }
+  /** Leaves the job. What still waits is sent on the way out, and stays on the disk until the server has it. */
   function close() {
-    clearTimeout(retry)
-    context = undefined
+    if (context?.disk && link && outbox.commands.value.length) sendBehind(context.api, context.disk, confirmed.value.version, outbox.waiting.value)
+    link?.stop()
+    link = context = undefined
     status.value = 'closed'
-    outbox.value = []
-    refused.value = []
     notice.value = ''
-    history.done.value = []
-    history.undone.value = []
+    onTrouble('none', '')
+    outbox.end()
+    history.clear()
     changes.clear()
-    wordsOf.clear()
     // What was shown stays until another job is there: a page that is on its way out may still read it.
   }
-
-  function newId(): string {
-    return context?.newId?.() ?? crypto.randomUUID()
+  function confirm(opened: JobOpened) {
+    members.value = opened.members
+    confirmed.value = buildDocument(context?.jobId ?? '', opened.version, opened.records)
   }
+
   /** The one door for every edit. Refused: a sentence in `notice`, and nothing has changed. Returns the command's id. */
   function edit(intent: Intent): string | undefined {
-    const words = safely(() => describe(shown.value, intent)) ?? intent.verb
-    const id = dispatch(intent)
-    if (!id) return undefined
-    wordsOf.set(id, words)
-    history.record({ commandId: id, words })
-    return id
+    const words = wordsOf(intent)
+    const commandId = carryOut(intent, words)
+    if (commandId) history.record({ commandId, words })
+    return commandId
   }
   function undo() {
-    history.step('undo', (commandId) => dispatch({ verb: 'revert', args: { commandId, at: now() } }))
+    history.step('undo', ({ commandId, words }) => carryOut(revertOf(commandId), `Undo: ${words}`))
   }
   function redo() {
-    history.step('redo', (commandId) => dispatch({ verb: 'revert', args: { commandId, at: now() } }))
+    history.step('redo', ({ commandId, words }) => carryOut(revertOf(commandId), `Redo: ${words}`))
+  }
+  function revertOf(commandId: string): Intent {
+    return { verb: 'revert', args: { commandId, at: context?.now?.() ?? new Date().toISOString() } }
   }
 
-  function dispatch(intent: Intent): string | undefined {
+  function carryOut(intent: Intent, words: string): string | undefined {
     if (!context || status.value !== 'ready') return undefined
     const command = { ...intent, id: newId(), madeAt: confirmed.value.version } as Command
-    const played = replay(shown.value, [command], { actor: context.actor, changeOf })
-    const [refusal] = played.refused
-    notice.value = refusal?.error.message ?? ''
+    const played = replay(doc.value, [command], { actor: context.actor, changeOf })
+    notice.value = played.refused[0]?.error.message ?? ''
     const change = played.changes.get(command.id)
     if (!change || isEmpty(change)) return undefined
     changes.set(command.id, change)
-    outbox.value = [...outbox.value, command]
-    shown.value = played.doc
-    void context.disk?.add(command).catch(() => (notice.value = 'This device cannot keep your work while there is no connection'))
+    outbox.add({ command, words, undoes: command.verb === 'revert' ? (changeOf(command.args.commandId) ?? null) : null, refusal: null })
+    doc.value = played.doc
     void sync()
     return command.id
+  }
+  function changeOf(commandId: string): Change | undefined {
+    return changes.get(commandId)
   }
 
   /** Plays what is waiting over what is confirmed. */
   function rebase() {
     if (!context) return
-    const played = replay(confirmed.value, outbox.value, { actor: context.actor, changeOf })
+    const played = replay(confirmed.value, outbox.commands.value, { actor: context.actor, changeOf })
     for (const [id, change] of played.changes) changes.set(id, change)
-    shown.value = played.doc
-  }
-
-  /** Sends what waits and takes in what others did; one at a time, and again after a while when nobody answers. */
-  function sync(): Promise<void> {
-    syncing ??= run().finally(() => (syncing = undefined))
-    return syncing
-  }
-  async function run() {
-    const at = context
-    clearTimeout(retry)
-    try {
-      while (context === at && at && (outbox.value.length || known > confirmed.value.version)) {
-        const sent = outbox.value.slice(0, maxCommandsPerPush)
-        if (sent.length) await push(at, sent)
-        else await pull(at)
-      }
-      isOffline.value = false
-      waitMs = firstWaitMs
-    } catch (error) {
-      if (context !== at) return
-      if (error instanceof NoConnection) {
-        isOffline.value = true
-        retry = setTimeout(() => void sync(), waitMs)
-        waitMs = Math.min(waitMs * 2, longestWaitMs)
-      } else if (error instanceof ApiProblem && error.status !== 401) {
-        notice.value = `Your work is kept here, but the server did not take it: ${error.message}`
-        retry = setTimeout(() => void sync(), longestWaitMs)
-      } else if (!(error instanceof ApiProblem)) throw error
-    }
-  }
-  async function push(at: OpenWith, sent: readonly Command[]) {
-    const answer = await at.api.push(confirmed.value.version, sent)
-    if (context !== at) return
-    const before = shown.value
-    take(answer.since, answer.version)
-    for (const { commandId, message, code, details } of answer.refused) {
-      const command = sent.find((each) => each.id === commandId)
-      if (!command) continue
-      history.forget(commandId)
-      changes.delete(commandId)
-      refused.value = [...refused.value, { command, words: wordsOf.get(commandId) ?? safely(() => describe(before, command)) ?? command.verb, message, conflict: code === 'conflict' && isConflict(details) ? details : null }]
-    }
-    const settled = new Set([...answer.accepted.map((each) => each.commandId), ...answer.refused.map((each) => each.commandId)])
-    outbox.value = outbox.value.filter((command) => !settled.has(command.id))
-    void at.disk?.remove([...settled]).catch(() => undefined)
-    rebase()
-  }
-  async function pull(at: OpenWith) {
-    const answer = await at.api.since(confirmed.value.version)
-    if (context !== at) return
-    take(answer.since, answer.version)
-    rebase()
+    doc.value = played.doc
   }
   /** Folds in what the server accepted, ours and everybody's. */
-  function take(entries: readonly LogEntry[], version: number) {
+  function take(entries: readonly LogEntry[]) {
     let next = confirmed.value
-    for (const entry of entries) {
-      if (entry.version <= next.version) continue
-      next = { ...apply(next, entry.change), version: entry.version }
-      if (entry.actorId === context?.actor.id) changes.set(entry.commandId, entry.change)
+    for (const { version, change, actorId, commandId } of entries) {
+      if (version <= next.version) continue
+      if (version > next.version + 1) throw new Error(`Nothing is known of version ${next.version + 1}`)
+      next = { ...apply(next, change), version }
+      if (actorId === context?.actor.id) changes.set(commandId, change)
     }
     confirmed.value = next
-    known = Math.max(known, version)
+  }
+  function settle(accepted: readonly string[], refusedNow: readonly RefusedCommand[]) {
+    for (const { command } of outbox.settle(accepted, refusedNow)) {
+      history.forget(command.id)
+      changes.delete(command.id)
+    }
+    rebase()
+  }
+  function onLeftBehind(kept: readonly Kept[]) {
+    remember(kept)
+    rebase()
+    void sync()
+  }
+  /** What was undone in an earlier session is known only from the disk. */
+  function remember(kept: readonly Kept[]) {
+    for (const { command, undoes } of kept) if (command.verb === 'revert' && undoes && !changes.has(command.args.commandId)) changes.set(command.args.commandId, undoes)
+  }
+  function onTrouble(next: SyncTrouble, sentence: string) {
+    trouble.value = next
+    troubleText.value = sentence
   }
 
+  /** Sends what waits and takes in what others did; resolves when there is nothing left or nobody answers. */
+  async function sync(): Promise<void> {
+    await link?.sync()
+  }
+  /** Asks the server whether there is more, although nothing says so. */
+  async function ask(): Promise<void> {
+    await link?.ask()
+  }
   /** The server says that there is more. */
   function heard(version: number) {
-    if (version <= known && version <= confirmed.value.version) return
-    known = Math.max(known, version)
-    void sync()
+    lastHeard = version
+    link?.heard(version)
   }
   /** Somebody has seen a refusal, and lets it be. */
   function dismiss(commandId: string) {
-    refused.value = refused.value.filter((each) => each.command.id !== commandId)
+    outbox.dismiss(commandId)
   }
-  /** Does a refused command after all, now that its author has seen the other value. */
+  /** Does a refused command after all, now that its author has seen the other value. What is refused again stays. */
   function insist(commandId: string) {
-    const again = refused.value.find((each) => each.command.id === commandId)
-    dismiss(commandId)
+    const again = outbox.refused.value.find((each) => each.command.id === commandId)
     if (!again) return
     const { id: _id, madeAt: _madeAt, ...intent } = again.command
-    edit(intent as Intent)
+    const done = carryOut(intent as Intent, again.words)
+    if (done) history.record({ commandId: done, words: again.words })
+    if (done || notice.value === '') dismiss(commandId)
+  }
+  function wordsOf(intent: Intent): string {
+    try {
+      return describe(doc.value, intent)
+    } catch {
+      // It will be refused, with a sentence of its own.
+      return intent.verb
+    }
   }
   function memberName(id: string): string {
     return members.value.find((member) => member.id === id)?.name ?? 'somebody'
   }
-})
-
-const isConflict = (details: unknown): details is ConflictDetails => typeof details === 'object' && details !== null && 'theirs' in details && 'field' in details
-
-function safely<T>(work: () => T): T | undefined {
-  try {
-    return work()
-  } catch {
-    return undefined
+  function newId(): string {
+    return context?.newId?.() ?? crypto.randomUUID()
   }
-}
+})

@@ -14,7 +14,7 @@ export function useJobHistory() {
   const undone = shallowRef<readonly Done[]>([])
   const undoWords = computed(() => done.value.at(-1)?.words)
   const redoWords = computed(() => undone.value.at(-1)?.words)
-  return { done, undone, undoWords, redoWords, record, forget, step }
+  return { done, undone, undoWords, redoWords, record, forget, step, clear }
 
   /** A new edit ends the redo line. */
   function record(entry: Done) {
@@ -27,12 +27,16 @@ export function useJobHistory() {
     undone.value = undone.value.filter((each) => each.commandId !== commandId)
   }
   /** Takes the last of one list, reverts it, and puts the revert on the other, so that it can be reverted in turn. */
-  function step(direction: 'undo' | 'redo', revert: (commandId: string) => string | undefined) {
+  function step(direction: 'undo' | 'redo', revert: (last: Done) => string | undefined) {
     const [from, to] = direction === 'undo' ? [done, undone] : [undone, done]
     const last = from.value.at(-1)
     if (!last) return
     from.value = from.value.slice(0, -1)
-    const commandId = revert(last.commandId)
-    if (commandId) to.value = [...to.value, { commandId, words: last.words }]
+    const commandId = revert(last)
+    if (commandId) to.value = [...to.value, { commandId, words: last.words }].slice(-depth)
+  }
+  function clear() {
+    done.value = []
+    undone.value = []
   }
 }
