@@ -8,16 +8,25 @@ const mmAtGauge36 = 0.127
 /** Thinnest and thickest gauge that the formula is used for: 4/0 is -3. */
 const inRange = (awg: number) => usable(awg) && awg >= -3 && awg <= 50
 
-/** Diameter of a solid conductor of an American wire gauge, mm; 1/0 to 4/0 are 0 to -3, fractions are allowed. Null outside -3 to 50. */
-export const awgDiameterMm = (awg: number): number | null => (inRange(awg) ? mmAtGauge36 * ratio ** ((36 - awg) / steps) : null)
+/**
+ * Diameter of a solid conductor of an American wire gauge, mm; 1/0 to 4/0 are 0 to -3, fractions are allowed. Null
+ * outside -3 to 50.
+ */
+export const awgDiameterMm = (awg: number): number | null =>
+  inRange(awg) ? mmAtGauge36 * ratio ** ((36 - awg) / steps) : null
 
 /** The same in inches. */
-export const awgDiameterIn = (awg: number): number | null => (inRange(awg) ? 0.005 * ratio ** ((36 - awg) / steps) : null)
+export const awgDiameterIn = (awg: number): number | null =>
+  inRange(awg) ? 0.005 * ratio ** ((36 - awg) / steps) : null
+
+/** Area of a round solid conductor, mm2, from its diameter in mm. Null unless it is more than nothing. */
+export const areaOfDiameterMm2 = (diameterMm: number): number | null =>
+  usable(diameterMm) && diameterMm > 0 ? finite((Math.PI / 4) * diameterMm ** 2) : null
 
 /** Area of a solid conductor, mm2. Null as for the diameter. */
 export function awgAreaMm2(awg: number): number | null {
   const diameter = awgDiameterMm(awg)
-  return diameter === null ? null : (Math.PI / 4) * diameter ** 2
+  return diameter === null ? null : areaOfDiameterMm2(diameter)
 }
 
 /** Area in circular mils: the square of the diameter in thousandths of an inch. */
@@ -42,4 +51,13 @@ export function awgInParallel(gauges: readonly number[]): number | null {
     area += each
   }
   return awgOfAreaMm2(area)
+}
+
+/**
+ * The gauge of a whole number of equal conductors in parallel: two 18s are a 15. Null for none, or a gauge out of
+ * range.
+ */
+export function awgOfCount(awg: number, count: number): number | null {
+  const each = awgAreaMm2(awg)
+  return each === null || !Number.isSafeInteger(count) || count < 1 ? null : awgOfAreaMm2(each * count)
 }

@@ -5,6 +5,9 @@ export type Inputs = Readonly<Record<string, unknown>>
 export type Answer = (inputs: Inputs) => unknown
 export type Answers = Readonly<Record<string, Answer>>
 
+/** Tables by what a row's formula calls them, the first that matches. */
+export type FactAnswers = readonly (readonly [RegExp, Answer])[]
+
 /** A number of the row; NaN where it has none, which every calculation answers with null. */
 export const num = (inputs: Inputs, name: string, otherwise = Number.NaN): number => {
   const value = inputs[name]

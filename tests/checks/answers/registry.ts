@@ -1,13 +1,14 @@
 import type { CheckRow } from '../checkRow.ts'
 import { cablingAnswers } from './cabling.ts'
-import type { Answer, Answers } from './readInputs.ts'
+import { electricalAnswers, electricalFacts } from './electrical.ts'
+import { type Answer, type Answers, byWords, type FactAnswers } from './readInputs.ts'
 
 /** Calculations by the name that rows use. */
-const calculations: Answers = { ...cablingAnswers }
+const calculations: Answers = { ...cablingAnswers, ...electricalAnswers }
 
 /** Table entries by the formula that names their table. */
-const facts: Answers = {}
+const facts: FactAnswers = electricalFacts
 
 /** The product's own code for a row; undefined where nothing answers it. */
 export const answerOf = ({ fn, formula }: Pick<CheckRow, 'fn' | 'formula'>): Answer | undefined =>
-  fn === 'fact' ? facts[formula] : calculations[fn]
+  fn === 'fact' ? byWords(formula, facts) : calculations[fn]
