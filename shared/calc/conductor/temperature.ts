@@ -38,8 +38,8 @@ export function coefficientAt(perKelvin20: number, referenceC: number): number |
 }
 
 /**
- * Factor that takes a resistance measured at a temperature back to 20 °C: Kt = 1/(1 + 0.004 (T - 20)). Source: IEC 60228
- * extract, which uses the rounded coefficient. Null outside -60 to 250 °C.
+ * Factor that takes a resistance measured at a temperature back to 20 °C: Kt = 1/(1 + 0.004 (T - 20)). Source: IEC
+ * 60228 extract, which uses the rounded coefficient. Null outside -60 to 250 °C.
  */
 export function factorTo20(temperatureC: number, perKelvin: number = iecPerKelvin20): number | null {
   if (!usable(temperatureC, perKelvin) || perKelvin < 0 || !inRange(temperatureC)) return null

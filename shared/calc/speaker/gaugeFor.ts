@@ -13,8 +13,17 @@ export interface GaugeAdvice {
   readonly longestM: number
 }
 
-/** The thinnest on offer that keeps a line within its limit: of those that do, the one with the most resistance. Null when none does. */
-export function thinnestThatHolds(offers: readonly GaugeOffer[], lengthM: number, loadOhm: number, limit: number, convention: LossConvention): GaugeAdvice | null {
+/**
+ * The thinnest on offer that keeps a line within its limit: of those that do, the one with the most resistance. Null
+ * when none does.
+ */
+export function thinnestThatHolds(
+  offers: readonly GaugeOffer[],
+  lengthM: number,
+  loadOhm: number,
+  limit: number,
+  convention: LossConvention,
+): GaugeAdvice | null {
   let best: (GaugeAdvice & { ohm: number }) | null = null
   for (const { id, conductorOhmPerKm } of offers) {
     const loop = loopResistanceOhm(lengthM, conductorOhmPerKm)

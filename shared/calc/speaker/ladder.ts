@@ -19,7 +19,7 @@ export interface LadderAnswer {
  * Null for no section, a negative resistance, or no load at all.
  */
 export function speakerLadder(sections: readonly LadderSection[]): LadderAnswer | null {
-  if (!sections.length || sections.some(({ loopOhm, loadOhm }) => !usable(loopOhm) || loopOhm < 0 || (loadOhm !== null && (!usable(loadOhm) || loadOhm <= 0)))) return null
+  if (!sections.length || !sections.every(isPossible)) return null
   // Admittance seen at each node, from the far end back to the amplifier.
   const at: number[] = new Array<number>(sections.length).fill(0)
   for (let i = sections.length - 1; i >= 0; i--) {
@@ -37,3 +37,6 @@ export function speakerLadder(sections: readonly LadderSection[]): LadderAnswer 
   const inputOhm = finite(sections[0]!.loopOhm + 1 / at[0]!)
   return inputOhm === null || lossDb.some((loss) => !Number.isFinite(loss)) ? null : { inputOhm, lossDb }
 }
+
+const isPossible = ({ loopOhm, loadOhm }: LadderSection) =>
+  usable(loopOhm) && loopOhm >= 0 && (loadOhm === null || (usable(loadOhm) && loadOhm > 0))

@@ -41,7 +41,8 @@ export function lineNode({ loadsOhm, onward }: Pick<LineLeg, 'loadsOhm' | 'onwar
  * Share of the load that a loop may have so that it and what comes after it stay within a limit, both as ratios Rc/Z:
  * (1 + x)/k - 1. Below nothing where what comes after loses more than the limit by itself.
  */
-export const ownShare = (limitRatio: number, worstFactor: number): number | null => (usable(limitRatio, worstFactor) && worstFactor >= 1 ? finite((1 + limitRatio) / worstFactor - 1) : null)
+export const ownShare = (limitRatio: number, worstFactor: number): number | null =>
+  usable(limitRatio, worstFactor) && worstFactor >= 1 ? finite((1 + limitRatio) / worstFactor - 1) : null
 
 /** The ratio Rc/Z of a single line that would lose as much: (1 + R/Z) k - 1. Null for impossible input. */
 export function totalRatio(loopOhm: number, { behindOhm, worstFactor }: LineNode): number | null {

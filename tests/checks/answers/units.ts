@@ -11,3 +11,6 @@ export const ftAsM = (feet: number) => feet * metresPerFoot
 
 /** Metres given back as feet. */
 export const mAsFt = (value: number | null) => scaled(value, 1 / metresPerFoot)
+
+/** A result that goes on into the next calculation, where NaN is what is impossible. */
+export const orNaN = (value: number | null): number => value ?? Number.NaN
