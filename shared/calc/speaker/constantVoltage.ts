@@ -14,7 +14,8 @@ export interface Taps {
 
 /** What taps add up to, watts. Null for a negative tap, or a count that is not whole. */
 export function tapsTotalW(taps: readonly Taps[]): number | null {
-  if (taps.some(({ tapW, count }) => !usable(tapW) || tapW < 0 || !Number.isSafeInteger(count) || count < 0)) return null
+  const isPossible = ({ tapW, count }: Taps) => usable(tapW) && tapW >= 0 && Number.isSafeInteger(count) && count >= 0
+  if (!taps.every(isPossible)) return null
   return finite(taps.reduce((sum, { tapW, count }) => sum + tapW * count, 0))
 }
 

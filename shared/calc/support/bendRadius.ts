@@ -18,6 +18,9 @@ export type BentCable = keyof typeof bendFactors
 export const fibreCordRadiusMm = 25
 
 /** Least inside bend radius, mm: factor x outer diameter. Null: a value that is no number, or not above nothing. */
-export function bendRadiusMm(cable: BentCable, outerDiameterMm: number): number | null {
-  return usable(outerDiameterMm) && outerDiameterMm > 0 ? finite(bendFactors[cable] * outerDiameterMm) : null
-}
+export const radiusForFactorMm = (factor: number, outerDiameterMm: number): number | null =>
+  usable(factor, outerDiameterMm) && factor > 0 && outerDiameterMm > 0 ? finite(factor * outerDiameterMm) : null
+
+/** The same by the kind of cable. */
+export const bendRadiusMm = (cable: BentCable, outerDiameterMm: number): number | null =>
+  radiusForFactorMm(bendFactors[cable], outerDiameterMm)
