@@ -2,13 +2,24 @@ import { conductorAnswers, conductorFacts } from './conductor.ts'
 import { type Answers, byWords, type FactAnswers, type Inputs, text } from './readInputs.ts'
 import { speakerAnswers } from './speaker.ts'
 import { twistedPairAnswers, twistedPairFacts, twistedPairLimitNames } from './twistedPair.ts'
+import { videoAnswers, videoFacts } from './video.ts'
 
 /** Every calculation of the electrical half, by the name that check rows use. */
-export const electricalAnswers: Answers = { ...conductorAnswers, ...speakerAnswers, ...twistedPairAnswers }
+export const electricalAnswers: Answers = {
+  ...conductorAnswers,
+  ...speakerAnswers,
+  ...twistedPairAnswers,
+  ...videoAnswers,
+}
 
 /** Limits that rows ask for by name alone. */
 const limitNames = [...twistedPairLimitNames]
 const limitByName = (i: Inputs) => byWords(text(i, 'name'), limitNames)
 
 /** Every table of the electrical half, by what its rows call it. */
-export const electricalFacts: FactAnswers = [...conductorFacts, ...twistedPairFacts, [/^limit$/, limitByName]]
+export const electricalFacts: FactAnswers = [
+  ...conductorFacts,
+  ...twistedPairFacts,
+  ...videoFacts,
+  [/^limit$/, limitByName],
+]
