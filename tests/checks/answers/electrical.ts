@@ -1,4 +1,6 @@
 import { conductorAnswers, conductorFacts } from './conductor.ts'
+import { poeAnswers, poeFacts, poeLimitNames } from './poe.ts'
+import { powerAnswers, powerFacts } from './power.ts'
 import { type Answers, byWords, type FactAnswers, type Inputs, text } from './readInputs.ts'
 import { speakerAnswers } from './speaker.ts'
 import { twistedPairAnswers, twistedPairFacts, twistedPairLimitNames } from './twistedPair.ts'
@@ -10,10 +12,12 @@ export const electricalAnswers: Answers = {
   ...speakerAnswers,
   ...twistedPairAnswers,
   ...videoAnswers,
+  ...poeAnswers,
+  ...powerAnswers,
 }
 
 /** Limits that rows ask for by name alone. */
-const limitNames = [...twistedPairLimitNames]
+const limitNames = [...twistedPairLimitNames, ...poeLimitNames]
 const limitByName = (i: Inputs) => byWords(text(i, 'name'), limitNames)
 
 /** Every table of the electrical half, by what its rows call it. */
@@ -21,5 +25,7 @@ export const electricalFacts: FactAnswers = [
   ...conductorFacts,
   ...twistedPairFacts,
   ...videoFacts,
+  ...poeFacts,
+  ...powerFacts,
   [/^limit$/, limitByName],
 ]
