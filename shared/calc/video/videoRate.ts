@@ -61,7 +61,9 @@ export function fixedRateGbps(pixelClock: number, chroma: Chroma, bitsPerCompone
 
 /** Raw rate of a link of lanes, Gb/s. Null unless the lanes are a whole number and the rate is more than nothing. */
 export const linkGbps = (lanes: number, gbpsPerLane: number): number | null =>
-  return bits === null || !usable(pixelClock) || pixelClock <= 0 ? null : finite((pixelClock * bits * 18) / 16_000)
+  Number.isSafeInteger(lanes) && lanes > 0 && usable(gbpsPerLane) && gbpsPerLane > 0
+    ? finite(lanes * gbpsPerLane)
+    : null
 
 /** What a fixed-rate link carries after its 16-to-18 coding, Gb/s: 48 raw is 42.67. Null as above. */
 export function linkPayloadGbps(lanes: number, gbpsPerLane: number): number | null {
