@@ -1,3 +1,4 @@
+import { coaxAnswers, coaxFacts } from './coax.ts'
 import { conductorAnswers, conductorFacts } from './conductor.ts'
 import { poeAnswers, poeFacts, poeLimitNames } from './poe.ts'
 import { powerAnswers, powerFacts } from './power.ts'
@@ -14,6 +15,7 @@ export const electricalAnswers: Answers = {
   ...videoAnswers,
   ...poeAnswers,
   ...powerAnswers,
+  ...coaxAnswers,
 }
 
 /** Limits that rows ask for by name alone. */
@@ -27,5 +29,6 @@ export const electricalFacts: FactAnswers = [
   ...videoFacts,
   ...poeFacts,
   ...powerFacts,
+  ...coaxFacts,
   [/^limit$/, limitByName],
 ]
