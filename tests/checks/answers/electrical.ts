@@ -1,5 +1,6 @@
 import { coaxAnswers, coaxFacts } from './coax.ts'
 import { conductorAnswers, conductorFacts } from './conductor.ts'
+import { fibreAnswers, fibreFacts } from './fibre.ts'
 import { poeAnswers, poeFacts, poeLimitNames } from './poe.ts'
 import { powerAnswers, powerFacts } from './power.ts'
 import { type Answers, byWords, type FactAnswers, type Inputs, text } from './readInputs.ts'
@@ -16,6 +17,7 @@ export const electricalAnswers: Answers = {
   ...poeAnswers,
   ...powerAnswers,
   ...coaxAnswers,
+  ...fibreAnswers,
 }
 
 /** Limits that rows ask for by name alone. */
@@ -30,5 +32,6 @@ export const electricalFacts: FactAnswers = [
   ...poeFacts,
   ...powerFacts,
   ...coaxFacts,
+  ...fibreFacts,
   [/^limit$/, limitByName],
 ]
