@@ -1,3 +1,4 @@
+import { analogueAnswers, analogueLimitNames } from './analogue.ts'
 import { coaxAnswers, coaxFacts } from './coax.ts'
 import { conductorAnswers, conductorFacts } from './conductor.ts'
 import { fibreAnswers, fibreFacts } from './fibre.ts'
@@ -18,10 +19,11 @@ export const electricalAnswers: Answers = {
   ...powerAnswers,
   ...coaxAnswers,
   ...fibreAnswers,
+  ...analogueAnswers,
 }
 
 /** Limits that rows ask for by name alone. */
-const limitNames = [...twistedPairLimitNames, ...poeLimitNames]
+const limitNames = [...twistedPairLimitNames, ...poeLimitNames, ...analogueLimitNames]
 const limitByName = (i: Inputs) => byWords(text(i, 'name'), limitNames)
 
 /** Every table of the electrical half, by what its rows call it. */
