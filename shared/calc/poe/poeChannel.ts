@@ -21,7 +21,7 @@ export interface PoeDelivery {
 
 /**
  * What arrives of a source's power: I = P/V, V - I R, P - I² R. Every class's device power follows from it with the
- * worst voltage and resistance, to 0.06 W. Null for impossible input, or where nothing arrives.
+ * worst voltage and resistance, to 0.063 W. Null for impossible input, or where nothing arrives.
  */
 export function poeDelivery(sourceW: number, sourceV: number, channelOhm: number): PoeDelivery | null {
   if (!usable(sourceW, sourceV, channelOhm) || sourceW < 0 || sourceV <= 0 || channelOhm < 0) return null
