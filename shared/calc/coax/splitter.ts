@@ -7,9 +7,8 @@ export const idealSplitDb = (ways: number): number | null =>
   Number.isSafeInteger(ways) && ways >= 1 ? 10 * Math.log10(ways) : null
 
 /**
- * Level after losses one after another, dB of any reference. Null for a value that is no number, or a negative loss.
+ * Level after losses one after another, dB of any reference; an amplifier's gain is a loss below nothing. Null for a
+ * value that is no number.
  */
-export function levelAfter(level: number, lossesDb: readonly number[]): number | null {
-  if (!usable(level, ...lossesDb) || lossesDb.some((loss) => loss < 0)) return null
-  return finite(lossesDb.reduce((left, loss) => left - loss, level))
-}
+export const levelAfter = (level: number, lossesDb: readonly number[]): number | null =>
+  usable(level, ...lossesDb) ? finite(lossesDb.reduce((left, loss) => left - loss, level)) : null
