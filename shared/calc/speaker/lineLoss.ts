@@ -36,8 +36,9 @@ export function loopResistanceOhm(lengthM: number, conductorOhmPerKm: number, co
  * nothing.
  */
 export function lineLoss(loopOhm: number, loadOhm: number): LineLoss | null {
-  if (!usable(loopOhm, loadOhm) || loopOhm < 0 || loadOhm <= 0 || !Number.isFinite(loopOhm / loadOhm)) return null
-  return lossOf(loopOhm / loadOhm)
+  if (!usable(loopOhm, loadOhm) || loopOhm < 0 || loadOhm <= 0) return null
+  const loss = lossOf(loopOhm / loadOhm)
+  return usable(loss.decibel, loss.impedance, loss.voltage, loss.power) ? loss : null
 }
 
 /**

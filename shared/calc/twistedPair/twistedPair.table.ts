@@ -4,10 +4,14 @@ export const twistedPairLimits = {
   permanentLinkM: 90,
   /** The link with its cords. */
   channelM: 100,
+  /** The same as printed in feet. */
+  permanentLinkFt: 295,
+  channelFt: 328,
   /** Cords at both ends together. */
   cordsM: 10,
   /** Pair left untwisted at a termination, half an inch. */
   untwistMm: 13,
+  untwistIn: 0.5,
   /** Longest work-area cord at a multi-user outlet, by TIA and by ISO. */
   workAreaCordM: 22,
   workAreaCordIsoM: 20,

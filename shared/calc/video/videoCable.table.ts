@@ -11,8 +11,8 @@ export const videoCableGbps = {
 } as const
 export type VideoCableCategory = keyof typeof videoCableGbps
 
-/** In the order of the table. */
-export const videoCableCategories = Object.keys(videoCableGbps) as VideoCableCategory[]
+/** Those whose limit was seen in a source, the least first. */
+export const advisedCategories = ['Standard', 'High Speed', 'Premium High Speed', 'Ultra High Speed'] as const
 
 /**
  * Longest passive copper to plan for, m, by the most Gb/s it shall carry: the specification sets no length. Common

@@ -44,7 +44,7 @@ const bitsPerCharacter = 30
  */
 export function tmdsGbps(pixelClock: number, chroma: Chroma, bitsPerComponent: number): number | null {
   const rate = characterRateMhz(pixelClock, chroma, bitsPerComponent)
-  return rate === null ? null : (rate * bitsPerCharacter) / 1000
+  return rate === null ? null : rate * (bitsPerCharacter / 1000)
 }
 
 /** Most that a TMDS link carries, Gb/s: a character rate of 600 MHz. */
@@ -68,7 +68,7 @@ export const linkGbps = (lanes: number, gbpsPerLane: number): number | null =>
 /** What a fixed-rate link carries after its 16-to-18 coding, Gb/s: 48 raw is 42.67. Null as above. */
 export function linkPayloadGbps(lanes: number, gbpsPerLane: number): number | null {
   const raw = linkGbps(lanes, gbpsPerLane)
-  return raw === null ? null : (raw * 16) / 18
+  return raw === null ? null : raw * (16 / 18)
 }
 
 /** Lanes and Gb/s per lane of the fixed-rate links (public licensing statements). */

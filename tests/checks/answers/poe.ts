@@ -25,8 +25,8 @@ const typeNamed = (pattern: string, key: 'mostA' | 'sourceLeastV' | 'deviceLeast
 /** Limits by what rows call them. */
 export const poeLimitNames: readonly (readonly [RegExp, number])[] = [
   ...typeNamed('type_?N.*max_?A', 'mostA'),
-  ...typeNamed('pse.*min.*N.*V|type_?N.*pse.*min', 'sourceLeastV'),
-  ...typeNamed('pd.*min.*N.*V|type_?N.*pd.*min', 'deviceLeastV'),
+  ...typeNamed('(?=.*pse)(?=.*min)(?=.*N)', 'sourceLeastV'),
+  ...typeNamed('(?=.*pd)(?=.*min)(?=.*N)', 'deviceLeastV'),
   [/channel_?R.*cat_?3/i, poeTypeLimits[1].channelOhm],
   [/channel_?R/i, poeTypeLimits[2].channelOhm],
   [/pse.*max.*V/i, poeTypeLimits[4].sourceMostV],

@@ -25,11 +25,14 @@ export const twistedPairLimitNames: readonly (readonly [RegExp, number])[] = [
   [/mutoa|work_?area/i, twistedPairLimits.workAreaCordM],
   [/pull.*lbf/i, pullTensions['four-pair'].poundsForce],
   [/pull/i, pullTensions['four-pair'].mostN],
+  [/untwist.*in$/i, twistedPairLimits.untwistIn],
   [/untwist/i, twistedPairLimits.untwistMm],
   [/bend.*(f_?utp|stp|ftp|screen|shield)/i, twistedPairLimits.screenedBendFactor],
   [/bend/i, bendFactors['four-pair']],
   [/conductor.*ohm/i, twistedPairLimits.conductorOhmPer100M],
   [/cat.*8|channel.*8/i, twistedPairLimits.category8ChannelM],
+  [/(permanent|link).*ft$/i, twistedPairLimits.permanentLinkFt],
+  [/^channel.*ft$/i, twistedPairLimits.channelFt],
   [/permanent|link/i, twistedPairLimits.permanentLinkM],
   [/^channel(_max|_total)?_m$/i, twistedPairLimits.channelM],
 ]
@@ -57,7 +60,8 @@ export const twistedPairFacts: FactAnswers = [
     /maximum channel/,
     (i) => {
       const [kind, name] = [ethernetKinds.find((known) => text(i, 'phy').startsWith(known)), category(i)]
-      const crosstalk = /benign|mitigat|allow/i.test(text(i, 'phy')) ? 'benign' : 'hostile'
+      // A remark in brackets says how bad the neighbours are; without one the worst is meant.
+      const crosstalk = /\((?!hostile|worst)/i.test(text(i, 'phy')) ? 'benign' : 'hostile'
       return kind && name && ethernetReachM(kind, name, crosstalk)
     },
   ],

@@ -1,7 +1,7 @@
 import { reducedClassReachM, straightRunM } from '../../../shared/calc/video/linkReach.ts'
 import { usbLengthM } from '../../../shared/calc/video/usb.table.ts'
 import { delayLengthM } from '../../../shared/calc/video/usbLength.ts'
-import { videoCableCategories, videoCableGbps } from '../../../shared/calc/video/videoCable.table.ts'
+import { advisedCategories, videoCableGbps } from '../../../shared/calc/video/videoCable.table.ts'
 import { cableCategoryFor } from '../../../shared/calc/video/videoCable.ts'
 import {
   characterRateMhz,
@@ -41,7 +41,8 @@ export const videoAnswers: Answers = {
   frl_gbps: rateBy(fixedRateGbps),
   frl_link_gbps: (i) => linkGbps(num(i, 'lanes'), num(i, 'gbps_per_lane')),
   frl_payload_gbps: (i) => linkPayloadGbps(num(i, 'lanes'), num(i, 'gbps_per_lane')),
-  hdmi_category: (i) => cableCategoryFor(num(i, 'gbps')),
+  // Where no category covers the rate, rows write none.
+  hdmi_category: (i) => cableCategoryFor(num(i, 'gbps')) ?? 'none',
   hdbt_max_m: (i) => {
     const category = linkCategory(i)
     return category && straightRunM(num(i, 'char_mhz'), category)
@@ -53,7 +54,7 @@ export const videoFacts: FactAnswers = [
   [
     /category maximum/,
     (i) => {
-      const name = oneOf(text(i, 'category'), videoCableCategories)
+      const name = oneOf(text(i, 'category'), [...advisedCategories, 'Ultra96'])
       return name && videoCableGbps[name]
     },
   ],
