@@ -30,6 +30,8 @@ export function openDatabase(url: string, connectionLimit = 10, onStatement?: (s
     connectTimeout: connectionDeadlineMs,
     enableKeepAlive: true,
     multipleStatements: false,
+    // An error's stack is complete without: Drizzle adds its own, and this would be taken for every statement that succeeds.
+    trace: false,
   })
   // Read-modify-write must fail rather than lose an update; a statement that runs away is stopped by the server too.
   pool.pool.on('connection', (connection: NewConnection) => {

@@ -1,6 +1,7 @@
-import { and, count, eq, or } from 'drizzle-orm'
+import { and, count, eq, or, sql } from 'drizzle-orm'
 import type { Job } from '../../../shared/model/job.ts'
 import type { Db, Session, Tx } from '../../db/client.ts'
+import { oncePerDatabase } from '../../db/oncePerDatabase.ts'
 import { jobRecordOf, jobRow } from '../../db/rows/jobRows.ts'
 import { momentColumn, momentOf } from '../../db/rows/leafs.ts'
 import { runs } from '../../db/tables/cabling.ts'
@@ -16,9 +17,12 @@ export async function lockJob(tx: Tx, scope: JobScope): Promise<number | undefin
   return row?.version
 }
 
+const versionOfJob = oncePerDatabase((db) =>
+  db.select({ version: jobs.version }).from(jobs).where(and(eq(jobs.companyId, sql.placeholder('companyId')), eq(jobs.id, sql.placeholder('jobId')))).prepare(),
+)
 /** A job's version, or undefined where the company has no such job. */
 export async function versionOf(db: Session, scope: JobScope): Promise<number | undefined> {
-  const [row] = await db.select({ version: jobs.version }).from(jobs).where(isJob(scope))
+  const [row] = await versionOfJob(db).execute({ ...scope })
   return row?.version
 }
 

@@ -22,7 +22,10 @@ export const jobRoutes = (jobs: JobsContext): readonly Route[] => [
   }),
   defineRoute({
     method: 'get', path: '/api/jobs/:jobId', action: 'job.read', params: jobParamsSchema, query: noInput, body: noInput,
-    handle: (context, { params }) => openJob(jobs, scopeOf(context, params)),
+    handle: async (context, { params }) => {
+      context.response.type('json').send(await openJob(jobs, scopeOf(context, params)))
+      return answered
+    },
   }),
   defineRoute({
     method: 'post', path: '/api/jobs/:jobId/commands', action: 'job.command', params: jobParamsSchema, query: noInput, body: pushSchema,

@@ -1,8 +1,9 @@
-import { and, asc, eq, gt, inArray, lte, ne } from 'drizzle-orm'
+import { and, asc, eq, gt, inArray, lte, ne, sql } from 'drizzle-orm'
 import type { LogEntry } from '../../../shared/api/jobs.ts'
 import type { LoggedChange } from '../../../shared/sync/conflict.ts'
 import type { Session, Tx } from '../../db/client.ts'
 import { momentColumn, momentOf } from '../../db/rows/leafs.ts'
+import { oncePerDatabase } from '../../db/oncePerDatabase.ts'
 import { jobLog } from '../../db/tables/jobs.ts'
 import type { JobScope } from './documentRepo.ts'
 
@@ -17,14 +18,18 @@ export async function appendLog(tx: Tx, scope: JobScope, entry: NewEntry): Promi
   await tx.insert(jobLog).values({ ...scope, ...entry, at: momentColumn(entry.at) })
 }
 
-/** What happened after a version, in order, the first `limit` entries. */
-export async function logSince(db: Session, scope: JobScope, version: number, limit: number): Promise<LogEntry[]> {
-  const rows = await db
+const entriesSince = oncePerDatabase((db) =>
+  db
     .select({ version: jobLog.version, commandId: jobLog.commandId, actorId: jobLog.actorId, verb: jobLog.verb, label: jobLog.label, at: jobLog.at, change: jobLog.change })
     .from(jobLog)
-    .where(and(isOf(scope), gt(jobLog.version, version)))
+    .where(and(eq(jobLog.companyId, sql.placeholder('companyId')), eq(jobLog.jobId, sql.placeholder('jobId')), gt(jobLog.version, sql.placeholder('version'))))
     .orderBy(asc(jobLog.version))
-    .limit(limit)
+    .limit(sql.placeholder('limit'))
+    .prepare(),
+)
+/** What happened after a version, in order, the first `limit` entries. */
+export async function logSince(db: Session, scope: JobScope, version: number, limit: number): Promise<LogEntry[]> {
+  const rows = await entriesSince(db).execute({ ...scope, version, limit })
   return rows.map((row) => ({ ...row, at: momentOf(row.at) }))
 }
 

@@ -1,6 +1,7 @@
-import { and, eq } from 'drizzle-orm'
+import { and, eq, sql } from 'drizzle-orm'
 import type { MemberAnswer } from '../../../shared/api/members.ts'
 import type { Session, Tx } from '../../db/client.ts'
+import { oncePerDatabase } from '../../db/oncePerDatabase.ts'
 import { members } from '../../db/tables/companies.ts'
 
 export type MemberRow = typeof members.$inferSelect
@@ -12,8 +13,11 @@ const shown = {
   disabled: members.disabled,
 }
 
+const membersOfCompany = oncePerDatabase((db) =>
+  db.select(shown).from(members).where(eq(members.companyId, sql.placeholder('companyId'))).orderBy(members.name).prepare(),
+)
 export function listMembers(db: Session, companyId: string): Promise<MemberAnswer[]> {
-  return db.select(shown).from(members).where(eq(members.companyId, companyId)).orderBy(members.name)
+  return membersOfCompany(db).execute({ companyId })
 }
 export async function readMember(db: Session, companyId: string, id: string): Promise<MemberAnswer | undefined> {
   const [row] = await db

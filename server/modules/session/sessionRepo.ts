@@ -2,11 +2,15 @@ import { and, eq, lt, sql } from 'drizzle-orm'
 import { members } from '../../db/tables/companies.ts'
 import { sessions, signInAttempts } from '../../db/tables/sessions.ts'
 import type { Session } from '../../db/client.ts'
+import { oncePerDatabase } from '../../db/oncePerDatabase.ts'
 
 type SessionRow = typeof sessions.$inferSelect
 
+const sessionByHash = oncePerDatabase((db) =>
+  db.select().from(sessions).where(eq(sessions.idHash, sql.placeholder('idHash'))).prepare(),
+)
 export async function readSession(db: Session, idHash: string): Promise<SessionRow | undefined> {
-  const [row] = await db.select().from(sessions).where(eq(sessions.idHash, idHash))
+  const [row] = await sessionByHash(db).execute({ idHash })
   return row
 }
 export async function writeSession(db: Session, row: SessionRow): Promise<void> {
@@ -51,9 +55,8 @@ export async function writePassphraseHash(
     .where(and(eq(members.companyId, companyId), eq(members.id, memberId)))
 }
 
-/** The member of a session with the company; undefined when disabled or gone. */
-export async function readSignedIn(db: Session, companyId: string, memberId: string) {
-  const [row] = await db
+const memberById = oncePerDatabase((db) =>
+  db
     .select({
       companyId: members.companyId,
       id: members.id,
@@ -63,7 +66,12 @@ export async function readSignedIn(db: Session, companyId: string, memberId: str
       disabled: members.disabled,
     })
     .from(members)
-    .where(and(eq(members.companyId, companyId), eq(members.id, memberId)))
+    .where(and(eq(members.companyId, sql.placeholder('companyId')), eq(members.id, sql.placeholder('memberId'))))
+    .prepare(),
+)
+/** The member of a session with the company; undefined when disabled or gone. */
+export async function readSignedIn(db: Session, companyId: string, memberId: string) {
+  const [row] = await memberById(db).execute({ companyId, memberId })
   return row && !row.disabled ? row : undefined
 }
 
