@@ -18,6 +18,15 @@ function keysOf(event: KeyboardEvent): string {
   return [...parts.filter(Boolean), key].join('+')
 }
 
+const listening = new Set<() => readonly Shortcut[]>()
+
+/** What the keys do on this page now, a line for each thing: the list behind "?". */
+export function shortcutsHere(): ReadonlyMap<string, readonly string[]> {
+  const lines = new Map<string, string[]>()
+  for (const { keys, label } of [...listening].flatMap((shortcuts) => shortcuts())) lines.set(label, [...(lines.get(label) ?? []), keys])
+  return lines
+}
+
 /** Listens for these keys while the component is there. Keys without Ctrl do nothing while somebody types. */
 export function useShortcuts(shortcuts: () => readonly Shortcut[]): void {
   function onKeydown(event: KeyboardEvent) {
@@ -28,6 +37,12 @@ export function useShortcuts(shortcuts: () => readonly Shortcut[]): void {
     event.preventDefault()
     shortcut.run()
   }
-  onMounted(() => window.addEventListener('keydown', onKeydown))
-  onBeforeUnmount(() => window.removeEventListener('keydown', onKeydown))
+  onMounted(() => {
+    window.addEventListener('keydown', onKeydown)
+    listening.add(shortcuts)
+  })
+  onBeforeUnmount(() => {
+    window.removeEventListener('keydown', onKeydown)
+    listening.delete(shortcuts)
+  })
 }
